@@ -1,0 +1,3 @@
+module adjoin
+
+go 1.26
