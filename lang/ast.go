@@ -8,7 +8,8 @@ type Span struct{ Start, End int }
 // Node is any piece of the tree.
 type Node interface{ Span() Span }
 
-// Stmt is one statement: *Let, *ExprStmt, *Claim, *Say or *Explain.
+// Stmt is one statement: *Let, *ExprStmt, *Claim, *Say, *Explain
+// or *Clear.
 type Stmt interface {
 	Node
 	stmt()
@@ -54,6 +55,9 @@ type (
 		Words []string
 	}
 )
+
+// Clear is the statement clear output: it wipes what the cell has shown so far.
+type Clear struct{ at }
 
 // Atoms.
 type (
@@ -252,6 +256,7 @@ func (*ExprStmt) stmt() {}
 func (*Claim) stmt()    {}
 func (*Say) stmt()      {}
 func (*Explain) stmt()  {}
+func (*Clear) stmt()    {}
 
 func (*Int) expr()           {}
 func (*Str) expr()           {}
