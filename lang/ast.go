@@ -293,7 +293,8 @@ type Lexicon struct {
 	Heads      []string            // subscript heads: F, g, zeta
 	Nouns      []string            // "minimal polynomial", "discrete logarithm", "gcd"
 	Roles      map[string][]string // by preposition: from -> "mask", "exponents", "reflected"; to -> "base"; of -> "degree", "width"
-	Predicates []string            // "irreducible", "subfield of", "embeds in", "primitive"
+	Predicates []string            // after is, without article: "irreducible", "subfield of", "primitive"
+	Verbs      []string            // predicates without is, in the third person: "embeds in" ("does not embed in" follows)
 	Forms      []string            // after as: "table", "powers of"
 	Applied    []string            // words applied without parentheses: sqrt
 }
