@@ -1,12 +1,18 @@
 package lang
 
-import "math/big"
+import (
+	"math/big"
+	"sync"
+)
 
 // Span is a half-open range of byte offsets in the source.
 type Span struct{ Start, End int }
 
 // Node is any piece of the tree.
-type Node interface{ Span() Span }
+type Node interface {
+	Span() Span
+	levels() int
+}
 
 // Stmt is one statement: *Let, *ExprStmt, *Claim, *Say, *Explain
 // or *Clear.
@@ -21,9 +27,16 @@ type Expr interface {
 	expr()
 }
 
-type at struct{ S Span }
+// at is the place of a node, and the height of the tree below it: the parser
+// bounds it, so that whoever walks a tree may recurse.
+type at struct {
+	S      Span
+	height int
+}
 
 func (a at) Span() Span { return a.S }
+
+func (a at) levels() int { return a.height }
 
 // Statements.
 type (
@@ -114,13 +127,16 @@ type (
 		at
 		X, Mod Expr
 	}
-	// Predicate is X is [not] WORDS {PREP E} or X embeds in Y: Words begins with "is" or the verb.
+	// Predicate is X is [not] [ARTICLE] WORDS {PREP E}, or with Verb set X embeds in Y and
+	// X does not embed in Y.
 	Predicate struct {
 		at
-		X     Expr
-		Not   bool
-		Words []string // without is, a, an, the, not: {"irreducible"}, {"subfield", "of"}, {"embeds", "in"}
-		Args  []Arg    // the object of a closing preposition of Words comes first, with Prep "" and no Role
+		X       Expr
+		Not     bool
+		Verb    bool
+		Article string   // a, an, the or nothing, as written
+		Words   []string // {"irreducible"}, {"subfield", "of"}; a verb in the third person: {"embeds", "in"}
+		Args    []Arg    // the object of a closing preposition of Words comes first, with Prep "" and no Role
 	}
 	// Logic is and / or / not; Y is nil for not.
 	Logic struct {
@@ -245,6 +261,7 @@ type (
 		Points []*big.Int
 	}
 	// Paren keeps the parentheses of the source so that printing is faithful.
+	// x^{n + 1} gives a Paren too.
 	Paren struct {
 		at
 		X Expr
@@ -288,7 +305,8 @@ func (*Cycle) expr()         {}
 func (*Paren) expr()         {}
 
 // Lexicon is the words that the parser must know to tell a phrase from names
-// side by side. The evaluator's vocabulary makes it.
+// side by side. The evaluator's vocabulary makes it. It must not be changed
+// after its first use, may be used by several goroutines, and is not copied.
 type Lexicon struct {
 	Heads      []string            // subscript heads: F, g, zeta
 	Nouns      []string            // "minimal polynomial", "discrete logarithm", "gcd"
@@ -297,6 +315,9 @@ type Lexicon struct {
 	Verbs      []string            // predicates without is, in the third person: "embeds in" ("does not embed in" follows)
 	Forms      []string            // after as: "table", "powers of"
 	Applied    []string            // words applied without parentheses: sqrt
+
+	once  sync.Once
+	words *words
 }
 
 // Error is a fault in the text: where it is, what is wrong, and the way out.
