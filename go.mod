@@ -2,4 +2,13 @@ module adjoin
 
 go 1.26
 
-require github.com/alecthomas/participle/v2 v2.1.4 // indirect
+require (
+	github.com/alecthomas/participle/v2 v2.1.4 // indirect
+	github.com/go-zeromq/goczmq/v4 v4.2.2 // indirect
+	github.com/go-zeromq/zmq4 v0.17.0 // indirect
+	github.com/inconshreveable/mousetrap v1.1.0 // indirect
+	github.com/spf13/cobra v1.10.2 // indirect
+	github.com/spf13/pflag v1.0.9 // indirect
+	golang.org/x/sync v0.7.0 // indirect
+	golang.org/x/text v0.15.0 // indirect
+)
