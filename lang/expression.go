@@ -18,7 +18,7 @@ const (
 	pNot            //
 	pRelation       // = != <= in is divides mod: one chain, not nested
 	pOver           // a coercion
-	pRange          // a..b; the objects of prepositions stand at this level
+	pRange          // a..b; objects of prepositions stand at this level
 	pSum            //
 	pProduct        //
 	pSign           //
@@ -48,9 +48,6 @@ func (p *parser) expression() Expr { return p.binary(pAs) }
 
 // clause reads an expression without a closing form.
 func (p *parser) clause() Expr { return p.binary(pClause) }
-
-// object reads what stands after a preposition.
-func (p *parser) object() Expr { return p.binary(pRange) }
 
 // binary reads an operand and the operators behind it that bind at least as
 // tightly as min.
@@ -269,9 +266,9 @@ func (p *parser) raise(start int, x Expr) Expr {
 	var y Expr
 	if p.isBracket("{") {
 		from := p.start()
-		open := p.open()
+		p.open()
 		y = p.expression()
-		p.close(open)
+		p.close()
 		switch y.(type) {
 		case *Int, *Name, *Subscript, *Paren:
 		default:
@@ -356,6 +353,9 @@ func (p *parser) call(start int, fn Expr) Expr {
 	if p.isWord(0, "where") && !p.condition {
 		p.next()
 		where = p.equations(len(args))
+		if len(p.opened) == 0 && p.isOp(",") {
+			p.fail(p.peek(), "where holds one equation for each name that is adjoined, and here are more", "write K(a, b) where a^2 = ..., b^3 = ...")
+		}
 	}
 	place := p.placeAll(start, fn, args)
 	for _, x := range where {

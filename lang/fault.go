@@ -61,19 +61,22 @@ func (p *parser) unexpected(want wanted) {
 
 func (p *parser) unexpectedEnd(t *lexer.Token) {
 	if n := len(p.opened); n > 0 {
-		open := p.opened[n-1]
+		open := p.opened[n-1].token
 		if t.Type == tEnd {
 			p.fail(t, "; stands inside the bracket "+opened(open), "close it with "+closing[open.Value]+" before")
 		}
 		panic(&Error{At: tokenSpan(open), Reason: "the bracket " + opened(open) + " is not closed",
 			Remedy: "close it with " + closing[open.Value], Incomplete: true})
 	}
-	last := p.previous()
-	reason := "an expression is missing at the end"
-	if last.Type != tEnd {
-		reason = "an expression is missing after " + last.Value
+	fault := &Error{At: tokenSpan(t), Reason: "there is no expression", Remedy: "write one", Incomplete: t.EOF()}
+	if last := p.previous(); last.Type != tEnd {
+		fault.Reason = "an expression is missing after " + last.Value
+		fault.Remedy = "write it, or leave " + last.Value + " out"
+		if fault.Incomplete {
+			fault.Remedy = "write it here or on the next line"
+		}
 	}
-	panic(&Error{At: tokenSpan(t), Reason: reason, Remedy: "a line that ends in an operator or a preposition goes on in the next one", Incomplete: t.EOF()})
+	panic(fault)
 }
 
 // opened names an opening bracket and its place.
@@ -86,7 +89,7 @@ func (p *parser) unexpectedCloser(t *lexer.Token) {
 	if n == 0 {
 		p.fail(t, "the bracket "+t.Value+" closes nothing", "leave it out, or open it before")
 	}
-	open := p.opened[n-1]
+	open := p.opened[n-1].token
 	if closing[open.Value] != t.Value {
 		p.fail(t, "the bracket "+opened(open)+" is closed by "+t.Value, "close it with "+closing[open.Value])
 	}
@@ -95,7 +98,7 @@ func (p *parser) unexpectedCloser(t *lexer.Token) {
 
 func (p *parser) unexpectedKeyword(t *lexer.Token, want wanted) {
 	if n := len(p.opened); n > 0 && (t.Value == "let" || t.Value == "claim") {
-		open := p.opened[n-1]
+		open := p.opened[n-1].token
 		p.fail(t, t.Value+" stands inside the bracket "+opened(open), "close it with "+closing[open.Value]+" before")
 	}
 	switch t.Value {
@@ -138,8 +141,9 @@ func (p *parser) unexpectedOperator(t *lexer.Token, want wanted) {
 		p.fail(t, "a colon belongs into a degree", "write [L : K]")
 	case op == "'":
 		p.fail(t, "a number has no derivative mark", "write f' behind a name or a bracket")
-	case op == "|->":
-		p.fail(t, "a function stands inside a larger expression", "put it in parentheses: (x |-> ...)")
+	case want == closer:
+		open := p.opened[len(p.opened)-1].token
+		p.fail(t, "the bracket "+opened(open)+" is not closed before "+t.Value, "close it with "+closing[open.Value])
 	default:
 		p.fail(t, t.Value+" cannot stand here", "put what belongs together in parentheses")
 	}
@@ -153,6 +157,8 @@ func (p *parser) missingOperator(t *lexer.Token) {
 	switch {
 	case last.Type == tInt && t.Type == tInt:
 		p.fail(t, "two numbers stand side by side", "write "+a+"*"+b+" for the product; a cycle is written ("+a+" "+b+")")
+	case last.Type == tInt && (t.Type == tName || t.Value == "("):
+		p.fail(t, "an exponent or root ends with its number "+a, "write * before "+b+" for a product, or parentheses around the whole exponent")
 	case last.Type == tName && t.Type == tName && (isWordText(plain(last)) || isWordText(plain(t))):
 		p.fail(t, reason, "a phrase is written NOUN of ..., as in trace of a; a product with *")
 	case t.Value == "(" && last.Type != tStr && t.Pos.Offset == tokenSpan(last).End:
@@ -161,6 +167,9 @@ func (p *parser) missingOperator(t *lexer.Token) {
 		p.fail(t, "a string stands beside "+brief(other(last, t).Value), "several things are written with commas between them")
 	case t.Value == "{" && last.Type == tName && strings.HasSuffix(last.Value, "_"):
 		p.fail(t, last.Value+"{...} is no notation that is known here", "an index in braces stands after the letters of the reference; write x_1 for a name")
+	}
+	if last.Type == tBracket || t.Type == tBracket {
+		p.fail(t, reason, "write * between them for the product")
 	}
 	p.fail(t, reason, "write "+a+"*"+b+" for the product")
 }
@@ -218,6 +227,13 @@ func tooManyTokens(t *lexer.Token) *Error {
 	return &Error{At: tokenSpan(t), Reason: fmt.Sprintf("the text has more than %d symbols", maxTokens), Remedy: "cut it into several cells"}
 }
 
+// strayContinuation is the fault of an indented line that begins with a sign:
+// read as a statement of its own it would drop a term without a word.
+func strayContinuation(t *lexer.Token) *Error {
+	return &Error{At: tokenSpan(t), Reason: "this line looks as if it went on from the one before, which has ended",
+		Remedy: "end that line with " + t.Value + ", or put the whole in parentheses; a line of its own is not indented"}
+}
+
 func missingEquals(t *lexer.Token) *Error {
 	fault := &Error{At: tokenSpan(t), Reason: "let needs = behind what it binds", Remedy: "write let x = ..., let (x, y) = ... or let f(n) = ...", Incomplete: t.EOF()}
 	if t.Type == tBad {
@@ -249,6 +265,9 @@ func badToken(text string) (reason, remedy string) {
 	if isSubscript(r) {
 		return "the index " + text + " has no letter before it", "write x_1 or x₁"
 	}
+	if unicode.IsMark(r) {
+		return fmt.Sprintf("the mark U+%04X stands on its own", r), "write the letter and its mark as one character"
+	}
 	if unicode.IsPrint(r) {
 		return text + " is not part of the notation", "leave it out, or say it in words"
 	}
@@ -271,7 +290,7 @@ func badNumber(text string) (reason, remedy string) {
 		if len(text) > 20 {
 			return t + " is a decimal fraction, which is not exact", "write a fraction, as 3/2"
 		}
-		return t + " is a decimal fraction, which is not exact", "write " + strings.TrimLeft(whole, "0_") + part + "/1" + strings.Repeat("0", len(part))
+		return t + " is a decimal fraction, which is not exact", "write " + integer(whole+part).String() + "/1" + strings.Repeat("0", len(part))
 	case strings.HasPrefix(text, "0x") || strings.HasPrefix(text, "0X"):
 		return t + " is not a hexadecimal number", "its digits are 0 to 9 and a to f, with single _ between them"
 	case strings.HasPrefix(text, "0b") || strings.HasPrefix(text, "0B"):

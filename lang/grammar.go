@@ -104,7 +104,7 @@ func (p *parser) binder() *Let {
 
 // names reads (a, b, ...) and may be empty.
 func (p *parser) names(place string) []Name {
-	open := p.open()
+	p.open()
 	var list []Name
 	for !p.isBracket(")") {
 		list = append(list, p.name(place))
@@ -113,7 +113,7 @@ func (p *parser) names(place string) []Name {
 		}
 		p.next()
 	}
-	p.close(open)
+	p.close()
 	return list
 }
 

@@ -27,11 +27,17 @@ func Parse(src string, lex *Lexicon) ([]Stmt, *Error) {
 		return nil, fault
 	}
 	var list []Stmt
+	begin := 0 // column of the statement before
 	for !tokens.Peek().EOF() {
 		if tokens.Peek().Type == tEnd {
 			tokens.Next()
 			continue
 		}
+		t := *tokens.Peek()
+		if len(list) > 0 && t.Pos.Column > begin && t.Type == tOp && (plain(&t) == "+" || plain(&t) == "-") && tokens.Range(tokens.RawCursor()-1, tokens.RawCursor())[0].Value == "" {
+			return nil, strayContinuation(&t)
+		}
+		begin = t.Pos.Column
 		s, err := w.grammar.ParseFromLexer(tokens, participle.AllowTrailing(true))
 		if err != nil {
 			return nil, asError(err)

@@ -7,11 +7,23 @@ import (
 // parser reads expressions. Its methods stop at a fault by a panic with
 // *Error, which attempt turns back into a result.
 type parser struct {
-	tokens    *lexer.PeekingLexer
-	words     *words
-	nesting   int
-	opened    []*lexer.Token // the brackets that are open
-	condition bool           // where holds a condition, not the equations of an adjunction
+	tokens  *lexer.PeekingLexer
+	words   *words
+	nesting int
+	opened  []bracket // those that are open
+	inside
+}
+
+// inside is what surrounds the place that is read, up to the next bracket.
+type inside struct {
+	condition bool // of a comprehension: where holds it, not the equations of an adjunction
+	object    bool // of a phrase or predicate, which takes the prepositions that follow a name
+}
+
+// bracket is an opened one, with what surrounds it.
+type bracket struct {
+	token *lexer.Token
+	inside
 }
 
 func (p *parser) peek() *lexer.Token { return p.tokens.Peek() }
@@ -110,12 +122,11 @@ func (p *parser) deeper() {
 func (p *parser) shallower() { p.nesting-- }
 
 // open reads an opening bracket, and close the one that belongs to it.
-// Inside brackets where means what it always does.
-func (p *parser) open() *lexer.Token {
-	t := p.next()
-	p.opened = append(p.opened, t)
+// What surrounds a bracket does not reach into it.
+func (p *parser) open() {
+	p.opened = append(p.opened, bracket{p.next(), p.inside})
+	p.inside = inside{}
 	p.deeper()
-	return t
 }
 
 // skip reads n tokens.
@@ -127,11 +138,13 @@ func (p *parser) skip(n int) {
 
 var closing = map[string]string{"(": ")", "[": "]", "{": "}"}
 
-func (p *parser) close(open *lexer.Token) {
-	if !p.isBracket(closing[open.Value]) {
+func (p *parser) close() {
+	last := p.opened[len(p.opened)-1]
+	if !p.isBracket(closing[last.token.Value]) {
 		p.unexpected(closer)
 	}
 	p.next()
+	p.inside = last.inside
 	p.opened = p.opened[:len(p.opened)-1]
 	p.shallower()
 }

@@ -26,7 +26,7 @@ func (p *parser) word() Expr {
 		if length > 1 || isPrepositionToken(after) {
 			return p.phrase(noun.words, length)
 		}
-	} else if after := p.ahead(run); isPrepositionToken(after) && (run > 1 && isWordText(plain(p.ahead(run-1))) || !isRelationToken(after)) {
+	} else if isPrepositionToken(p.ahead(run)) && p.isUnknownNoun(run) {
 		words := make([]string, run)
 		for i := range words {
 			words[i] = plain(p.ahead(i))
@@ -35,6 +35,23 @@ func (p *parser) word() Expr {
 	}
 	p.next()
 	return &Name{p.place(start), text}
+}
+
+// isUnknownNoun says whether a run of names before a preposition can only be
+// meant as a noun. Then it is read as one, and the evaluator says which nouns
+// are near. A symbol before over or in is no noun, and neither is a name as
+// the object of a phrase before a preposition that the phrase can take.
+func (p *parser) isUnknownNoun(run int) bool {
+	prep := p.ahead(run)
+	word := isWordText(plain(p.ahead(run - 1)))
+	switch {
+	case run > 1:
+		return word || !isRelationToken(prep)
+	case p.object:
+		_, role := p.match(p.words.roles[prep.Value], 2)
+		return word && prep.Value == "of" && !role
+	}
+	return !isRelationToken(prep)
 }
 
 // run counts the names that stand side by side from here, up to a verb or
@@ -99,7 +116,10 @@ func (p *parser) arg(prep, after string) Arg {
 	}
 	role := p.role(after, prep != "")
 	p.deeper()
-	x := p.object()
+	outer := p.object
+	p.object = true
+	x := p.binary(pRange)
+	p.object = outer
 	p.shallower()
 	if t := p.peek(); len(role) == 0 && (t.Type == tInt || t.Type == tStr) {
 		if n, ok := x.(*Name); ok {
@@ -214,7 +234,7 @@ func (p *parser) isVerb(k int) bool {
 }
 
 func (p *parser) isGeneratedBy(k int) bool {
-	return p.isWord(k, "generated") && p.isWord(k+1, "by") && p.ahead(k+2).Type == tName
+	return p.isWord(k, "generated") && p.isWord(k+1, "by")
 }
 
 // isConnective says whether the names from the k-th token on join what

@@ -55,15 +55,12 @@ func (p *parser) parentheses() Expr {
 	if p.ahead(1).Type == tInt && p.ahead(2).Type == tInt {
 		return p.cycle()
 	}
-	open := p.open()
-	outer := p.condition
-	p.condition = false
+	p.open()
 	var items []Expr
 	if !p.isBracket(")") {
 		items = p.sequence()
 	}
-	p.condition = outer
-	p.close(open)
+	p.close()
 	if len(items) == 1 {
 		return &Paren{p.place(start, items[0]), items[0]}
 	}
@@ -72,7 +69,7 @@ func (p *parser) parentheses() Expr {
 
 func (p *parser) cycle() Expr {
 	start := p.start()
-	open := p.open()
+	p.open()
 	var points []*big.Int
 	for p.peek().Type == tInt {
 		points = append(points, integer(p.next().Value))
@@ -83,7 +80,7 @@ func (p *parser) cycle() Expr {
 			p.fail(t, "a cycle holds integers parted by spaces alone", "write (1 2 3), or (a, b) for a tuple")
 		}
 	}
-	p.close(open)
+	p.close()
 	return &Cycle{p.place(start), points}
 }
 
@@ -101,15 +98,13 @@ func isCycles(x Expr) bool {
 
 // items reads the arguments in brackets, which may be none.
 func (p *parser) items() []Expr {
-	open := p.open()
-	outer := p.condition
-	p.condition = false
+	end := closing[p.peek().Value]
+	p.open()
 	items := []Expr{}
-	if !p.isBracket(closing[open.Value]) {
+	if !p.isBracket(end) {
 		items = p.sequence()
 	}
-	p.condition = outer
-	p.close(open)
+	p.close()
 	return items
 }
 
@@ -126,51 +121,45 @@ func (p *parser) sequence() []Expr {
 // list reads [a, b], [L : K] or a comprehension.
 func (p *parser) list() Expr {
 	start := p.start()
-	open := p.open()
-	outer := p.condition
-	p.condition = false
-	defer func() { p.condition = outer }()
+	p.open()
 	if p.isBracket("]") {
-		p.close(open)
+		p.close()
 		return &List{p.place(start), []Expr{}}
 	}
 	items := p.sequence()
 	if len(items) == 1 && p.isOp(":") {
 		p.next()
 		k := p.expression()
-		p.close(open)
+		p.close()
 		return &Degree{p.place(start, items[0], k), items[0], k}
 	}
 	if len(items) == 1 && p.isWord(0, "for") {
 		c := p.comprehension(items[0])
-		p.close(open)
+		p.close()
 		c.at = p.placeClauses(start, c)
 		return c
 	}
-	p.close(open)
+	p.close()
 	return &List{p.placeAll(start, nil, items), items}
 }
 
 // braces reads {a, b} or {x for x in S}.
 func (p *parser) braces() Expr {
 	start := p.start()
-	open := p.open()
-	outer := p.condition
-	p.condition = false
-	defer func() { p.condition = outer }()
+	p.open()
 	if p.isBracket("}") {
-		p.close(open)
+		p.close()
 		return &Set{p.place(start), []Expr{}}
 	}
 	items := p.sequence()
 	if len(items) == 1 && p.isWord(0, "for") {
 		c := p.comprehension(items[0])
 		c.Braces = true
-		p.close(open)
+		p.close()
 		c.at = p.placeClauses(start, c)
 		return c
 	}
-	p.close(open)
+	p.close()
 	return &Set{p.placeAll(start, nil, items), items}
 }
 
@@ -191,7 +180,7 @@ func (p *parser) comprehension(x Expr) *Comprehension {
 			p.failUnlessEnd("for needs in and what it runs through", "write for n in 1..20")
 		}
 		p.next()
-		in := p.object()
+		in := p.binary(pRange)
 		c.Clause = append(c.Clause, Clause{p.place(start, in), names, in})
 		if !p.isOp(",") {
 			break
@@ -201,7 +190,6 @@ func (p *parser) comprehension(x Expr) *Comprehension {
 		p.next()
 		c.Where = p.binary(pOr)
 	}
-	p.condition = false
 	return c
 }
 
@@ -237,12 +225,9 @@ func (p *parser) subscript(head, index string) Expr {
 	if !p.isBracket("{") || p.start() != p.end() {
 		p.failUnlessEnd("the index of "+head+" is missing", "write "+head+"_8 or "+head+"_{2^3}")
 	}
-	open := p.open()
-	outer := p.condition
-	p.condition = false
+	p.open()
 	x := p.expression()
-	p.condition = outer
-	p.close(open)
+	p.close()
 	return &Subscript{p.place(start, x), head, x}
 }
 

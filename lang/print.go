@@ -421,7 +421,7 @@ func (p *printer) args(list []Arg) {
 		for _, w := range a.Role {
 			p.put(w, " ")
 		}
-		if len(a.Role) > 0 && beginsSigned(a.X) || i < len(list)-1 && takes(a.X, "of", pRange) {
+		if len(a.Role) > 0 && beginsSigned(a.X) || i < len(list)-1 && takes(a.X, list[i+1].Prep, infix[list[i+1].Prep]) {
 			p.paren(a.X)
 		} else {
 			p.expr(a.X, pRange)
