@@ -353,9 +353,6 @@ func (p *parser) call(start int, fn Expr) Expr {
 	if p.isWord(0, "where") && !p.condition {
 		p.next()
 		where = p.equations(len(args))
-		if len(p.opened) == 0 && p.isOp(",") {
-			p.fail(p.peek(), "where holds one equation for each name that is adjoined, and here are more", "write K(a, b) where a^2 = ..., b^3 = ...")
-		}
 	}
 	place := p.placeAll(start, fn, args)
 	for _, x := range where {

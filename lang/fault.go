@@ -59,6 +59,14 @@ func (p *parser) unexpected(want wanted) {
 	p.missingOperator(t)
 }
 
+// trailing stops at the token behind a whole statement that ends in x.
+func (p *parser) trailing(x Expr) {
+	if p.isOp(",") && openEquations(x) != nil {
+		p.fail(p.peek(), "where holds one equation for each name that is adjoined, and here are more", "write K(a, b) where a^2 = ..., b^3 = ...")
+	}
+	p.unexpected(nothing)
+}
+
 func (p *parser) unexpectedEnd(t *lexer.Token) {
 	if n := len(p.opened); n > 0 {
 		open := p.opened[n-1].token

@@ -87,6 +87,17 @@ func (s *statement) tree(tokens *lexer.PeekingLexer) Stmt {
 	return &ExprStmt{place, s.Expr}
 }
 
+// last is the expression that the statement ends in, or nil.
+func (s *statement) last() Expr {
+	switch {
+	case s.Let != nil:
+		return s.Let.Value
+	case s.Claim != nil:
+		return s.Claim
+	}
+	return s.Expr
+}
+
 // binder reads what let binds: x, (x, y) or f(x, y).
 func (p *parser) binder() *Let {
 	if p.isBracket("(") {

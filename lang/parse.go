@@ -42,10 +42,10 @@ func Parse(src string, lex *Lexicon) ([]Stmt, *Error) {
 		if err != nil {
 			return nil, asError(err)
 		}
-		if t := tokens.Peek(); t.Type != tEnd && !t.EOF() {
-			return nil, attempt(w, tokens, func(p *parser) { p.unexpected(nothing) })
-		}
 		list = append(list, s.tree(tokens))
+		if t := tokens.Peek(); t.Type != tEnd && !t.EOF() {
+			return nil, attempt(w, tokens, func(p *parser) { p.trailing(s.last()) })
+		}
 	}
 	return list, nil
 }

@@ -263,21 +263,28 @@ func (p *printer) binary(x *Binary) {
 	}
 }
 
-// exponent writes what follows ^: its sign does not reach over 2x.
+// exponent writes what follows ^: its sign does not reach over 2x, and braces
+// would group instead of making a set.
 func (p *printer) exponent(y Expr) {
 	if u, ok := y.(*Unary); ok {
 		p.put(u.Op)
 		p.exponent(u.X)
 		return
 	}
-	p.expr(y, pPower)
+	text := printer{condition: p.condition}
+	text.expr(y, pPower)
+	if strings.HasPrefix(text.String(), "{") {
+		p.paren(y)
+	} else {
+		p.put(text.String())
+	}
 }
 
 // beside writes 2x. A blank parts a number from a longer word, and from a
 // letter that would make another number of it, as in 0x1.
 func (p *printer) beside(x *Binary) {
 	p.expr(x.X, pBeside+1)
-	var right printer
+	right := printer{condition: p.condition}
 	right.expr(x.Y, pPower)
 	text := right.String()
 	first, n := decode(text)
@@ -518,6 +525,10 @@ func takes(x Expr, op string, bind power) bool {
 			}
 		case *Call:
 			if len(y.Where) > 0 && (bind >= pOver || op == "=" || op == "mod") {
+				return true
+			}
+		case *GeneratedBy:
+			if op == "'" { // a' is a name that can be bound
 				return true
 			}
 		}
