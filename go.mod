@@ -1,6 +1,6 @@
 module adjoin
 
-go 1.26
+go 1.26.0
 
 require (
 	github.com/alecthomas/participle/v2 v2.1.4 // indirect
@@ -9,6 +9,9 @@ require (
 	github.com/inconshreveable/mousetrap v1.1.0 // indirect
 	github.com/spf13/cobra v1.10.2 // indirect
 	github.com/spf13/pflag v1.0.9 // indirect
+	github.com/yuin/goldmark v1.8.7 // indirect
 	golang.org/x/sync v0.7.0 // indirect
+	golang.org/x/sys v0.50.0 // indirect
+	golang.org/x/term v0.48.0 // indirect
 	golang.org/x/text v0.15.0 // indirect
 )
