@@ -363,6 +363,8 @@ func (p *parser) call(start int, fn Expr) Expr {
 
 // equations reads at most n equations, parted by commas.
 func (p *parser) equations(n int) []Expr {
+	p.deeper()
+	defer p.shallower()
 	var list []Expr
 	for {
 		start := p.start()

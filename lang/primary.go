@@ -237,7 +237,10 @@ func (p *parser) index(start int, text string) Expr {
 		return &Int{p.place(start), integer(text), text}
 	}
 	if head, index, ok := p.indexed(text); ok {
-		if x := p.index(start, index); x != nil {
+		p.deeper()
+		x := p.index(start, index)
+		p.shallower()
+		if x != nil {
 			return &Subscript{p.place(start, x), head, x}
 		}
 		return nil
