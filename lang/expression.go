@@ -54,11 +54,16 @@ func (p *parser) clause() Expr { return p.binary(pClause) }
 func (p *parser) binary(min power) Expr {
 	start := p.start()
 	x := p.operand(min)
+	loosest := pAtom // of the operators so far
 	for {
 		op, bind := p.operator()
 		if bind == 0 || bind < min {
 			break
 		}
+		if bind > loosest { // x as table * 2, a is prime + 1
+			p.unexpected(nothing)
+		}
+		loosest = bind
 		switch bind {
 		case pAs:
 			x = p.form(start, x)
