@@ -274,7 +274,7 @@ func (p *printer) exponent(y Expr) {
 	text := printer{condition: p.condition}
 	text.expr(y, pPower)
 	if strings.HasPrefix(text.String(), "{") {
-		p.paren(y)
+		p.put("(", text.String(), ")")
 	} else {
 		p.put(text.String())
 	}
@@ -289,7 +289,7 @@ func (p *printer) beside(x *Binary) {
 	text := right.String()
 	first, n := decode(text)
 	switch {
-	case first == '(' && !strings.HasPrefix(text, "()"):
+	case first == '(':
 	case !isLetter(first):
 		text = "(" + text + ")"
 	default:
