@@ -25,7 +25,7 @@ func (s *Server) runCells() {
 		}
 		s.desk.attend(j.request, true, func(*request) { s.runCell(ctx, done, j) })
 		done() // again, for a defect may have cut runCell short
-		s.history.flush()
+		s.history.Flush()
 	}
 }
 
@@ -46,7 +46,7 @@ func (s *Server) runCell(ctx context.Context, done func(), j *job) {
 	failure := s.execute(ctx, j.Code, out)
 	out.close()
 	if j.Stored() {
-		s.history.add(s.count, j.Code, out.result)
+		s.history.Add(s.count, j.Code, out.result)
 	}
 	if failure != nil {
 		if !j.Silent {

@@ -78,8 +78,8 @@ func DefaultHistory() string {
 	return filepath.Join(dir, "adjoin", "history.jsonl")
 }
 
-// add keeps a cell of this session.
-func (h *History) add(line int, input, output string) {
+// Add keeps a cell of this session.
+func (h *History) Add(line int, input, output string) {
 	h.mu.Lock()
 	defer h.mu.Unlock()
 	output = cut(output, maxRecorded)
@@ -103,9 +103,9 @@ func cut(s string, n int) string {
 	return s[:n] + " ..."
 }
 
-// flush writes what is not in the file yet. A history that cannot be written
+// Flush writes what is not in the file yet. A history that cannot be written
 // is no reason to bother anybody who computes.
-func (h *History) flush() {
+func (h *History) Flush() {
 	h.mu.Lock()
 	defer h.mu.Unlock()
 	if len(h.unsaved) == 0 {
@@ -197,6 +197,18 @@ func (h *History) answer(q wire.HistoryRequest) [][3]any {
 		out = append(out, a)
 	}
 	return out
+}
+
+// Inputs are all inputs that are kept, oldest first.
+func (h *History) Inputs() []string {
+	h.mu.Lock()
+	defer h.mu.Unlock()
+	h.load()
+	var inputs []string
+	for _, e := range h.all() {
+		inputs = append(inputs, e.input)
+	}
+	return inputs
 }
 
 func (h *History) all() []entry {

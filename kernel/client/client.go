@@ -32,7 +32,9 @@ type Client struct {
 
 	mu      sync.Mutex
 	waiting map[string]*inbox // by the id of the request
-	ended   error             // why no more messages come
+	reading int               // channels that are open
+	cause   error             // why the first of them ended
+	ended   error             // why no more messages come: set when all have ended
 	welcome chan struct{}
 	tap     func(*wire.Message)
 }
@@ -79,6 +81,7 @@ func Connect(ctx context.Context, d Dialer, o Options) (*Client, error) {
 		waiting: map[string]*inbox{},
 		welcome: make(chan struct{}),
 		tap:     o.Tap,
+		reading: 3,
 	}
 	if c.shell, err = open(d.Shell, zmtp.Dealer); err != nil {
 		return nil, err
@@ -202,13 +205,23 @@ func (b *inbox) take() []Arrival {
 	return m
 }
 
-// end wakes those that wait: nothing more comes.
+// linger is how long the other channels are read when one has ended: what the
+// kernel said before it ended may still be on its way.
+const linger = 200 * time.Millisecond
+
+// end notes that a channel has ended, and when it was the last wakes those that
+// wait: nothing more comes.
 func (c *Client) end(err error) {
 	c.mu.Lock()
 	defer c.mu.Unlock()
-	if c.ended == nil {
-		c.ended = fmt.Errorf("the connection to the kernel has ended: %w", err)
+	if c.cause == nil {
+		c.cause = err
+		time.AfterFunc(linger, c.Close)
 	}
+	if c.reading--; c.reading > 0 {
+		return
+	}
+	c.ended = fmt.Errorf("the connection to the kernel has ended: %w", c.cause)
 	for _, b := range c.waiting {
 		select {
 		case b.more <- struct{}{}:
@@ -275,7 +288,7 @@ func (p *Pending) Wait(ctx context.Context, see func(Arrival)) (*wire.Message, e
 	idle := false
 	for {
 		p.c.mu.Lock()
-		ended := p.c.ended
+		ended := p.c.ended // before what has come is looked at
 		p.c.mu.Unlock()
 		for _, a := range p.box.take() {
 			if see != nil {
