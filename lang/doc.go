@@ -4,5 +4,11 @@
 // phrases, the roles of literals, the predicates) comes from outside, as a
 // Lexicon.
 //
-// Where to start reading: ast.go is the tree; parse.go is Parse.
+// A text goes through scan.go (tokens), layout.go (where statements end),
+// grammar.go (statements, by the grammar library) and expression.go
+// (operators, by a table of binding powers) with its neighbours relation.go,
+// phrase.go and primary.go. The errors a user sees are in fault.go.
+//
+// Where to start reading: ast.go is the tree; parse.go is Parse; testdata
+// holds the notation by example.
 package lang

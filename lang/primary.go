@@ -74,11 +74,8 @@ func (p *parser) cycle() Expr {
 	for p.peek().Type == tInt {
 		points = append(points, integer(p.next().Value))
 	}
-	if !p.isBracket(")") {
-		t := p.peek()
-		if t.Type == tName || p.isOp(",") {
-			p.fail(t, "a cycle holds integers parted by spaces alone", "write (1 2 3), or (a, b) for a tuple")
-		}
+	if p.startsOperand(0) || p.isOp(",") {
+		p.fail(p.peek(), "a cycle holds integers parted by spaces alone", "write (1 2 3), or (a, b) for a tuple")
 	}
 	p.close()
 	return &Cycle{p.place(start), points}
