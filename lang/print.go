@@ -520,7 +520,7 @@ func takes(x Expr, op string, bind power) bool {
 	for ; x != nil; x = rightEnd(x) {
 		switch y := x.(type) {
 		case *Phrase:
-			if prepositions[op] || len(y.Args) > 0 && bind >= pRange || op == "(" {
+			if prepositions[op] || len(y.Args) > 0 && bind >= pRange || bind == pPostfix {
 				return true
 			}
 		case *Call:
