@@ -2,6 +2,7 @@ package lang
 
 import (
 	"fmt"
+	"sort"
 	"strings"
 	"unicode"
 	"unicode/utf8"
@@ -173,13 +174,24 @@ func (p *parser) missingOperator(t *lexer.Token) {
 		p.fail(t, reason, "write * for a product; only a number before a parenthesis multiplies by itself")
 	case t.Type == tStr || last.Type == tStr:
 		p.fail(t, "a string stands beside "+brief(other(last, t).Value), "several things are written with commas between them")
-	case t.Value == "{" && last.Type == tName && strings.HasSuffix(last.Value, "_"):
-		p.fail(t, last.Value+"{...} is no notation that is known here", "an index in braces stands after the letters of the reference; write x_1 for a name")
 	}
 	if last.Type == tBracket || t.Type == tBracket {
 		p.fail(t, reason, "write * between them for the product")
 	}
 	p.fail(t, reason, "write "+a+"*"+b+" for the product")
+}
+
+// missingIndex stops at a name just read that ends in _.
+func (p *parser) missingIndex(t *lexer.Token) {
+	if p.isBracket("{") {
+		known := make([]string, 0, len(p.words.heads))
+		for head := range p.words.heads {
+			known = append(known, head+"_{...}")
+		}
+		sort.Strings(known)
+		p.fail(t, t.Value+"{...} is no notation that is known here", "braces stand in "+strings.Join(known, ", ")+"; a name is written x_1")
+	}
+	p.fail(t, "the index of "+t.Value+" is missing", "write "+t.Value+"1")
 }
 
 func other(a, b *lexer.Token) *lexer.Token {

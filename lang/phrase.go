@@ -1,6 +1,8 @@
 package lang
 
 import (
+	"strings"
+
 	"github.com/alecthomas/participle/v2/lexer"
 )
 
@@ -34,6 +36,9 @@ func (p *parser) word() Expr {
 		return p.phrase(words, run)
 	}
 	p.next()
+	if strings.HasSuffix(text, "_") {
+		p.missingIndex(t)
+	}
 	return &Name{p.place(start), text}
 }
 
