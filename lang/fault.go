@@ -183,7 +183,7 @@ func (p *parser) missingOperator(t *lexer.Token) {
 
 // missingIndex stops at a name just read that ends in _.
 func (p *parser) missingIndex(t *lexer.Token) {
-	if p.isBracket("{") {
+	if p.isBracket("{") && len(p.words.heads) > 0 {
 		known := make([]string, 0, len(p.words.heads))
 		for head := range p.words.heads {
 			known = append(known, head+"_{...}")

@@ -120,7 +120,7 @@ func (p *parser) predicateWords() entry {
 		return e
 	}
 	var e entry
-	for p.ahead(len(e.tokens)).Type == tName {
+	for len(e.tokens) < maxRun && p.ahead(len(e.tokens)).Type == tName {
 		word := plain(p.ahead(len(e.tokens)))
 		e.tokens = append(e.tokens, word)
 		e.words = append(e.words, word)
