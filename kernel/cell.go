@@ -32,6 +32,9 @@ func (s *Server) runCells() {
 // runCell is the life of a cell from busy to idle.
 func (s *Server) runCell(ctx context.Context, done func(), j *job) {
 	if j.dropped != nil {
+		if s.queue.interruptedBetween() {
+			s.dropBehind(j.dropped)
+		}
 		j.refuse(s.count, j.dropped)
 		return
 	}
@@ -53,8 +56,7 @@ func (s *Server) runCell(ctx context.Context, done func(), j *job) {
 			emit("error", failure.triple())
 		}
 		if j.Stops() {
-			time.Sleep(quiet)
-			s.queue.drop(&Failure{Name: "Cancelled", Reason: "not run: an earlier cell failed"})
+			s.dropBehind(&Failure{Name: "Cancelled", Reason: "not run: an earlier cell failed"})
 		}
 		done()
 		j.refuse(s.count, failure)
@@ -67,6 +69,13 @@ func (s *Server) runCell(ctx context.Context, done func(), j *job) {
 		pages = []wire.Page{}
 	}
 	j.reply(wire.ExecuteReply{Status: wire.StatusOK, ExecutionCount: s.count, Payload: pages, UserExpressions: expressions})
+}
+
+// dropBehind drops the cells behind one that has failed, those on their way
+// included.
+func (s *Server) dropBehind(why *Failure) {
+	time.Sleep(quiet)
+	s.queue.drop(why)
 }
 
 // refuse is the reply to a cell that failed or was not run.

@@ -10,11 +10,12 @@ import (
 
 // queue holds the cells that wait, and the one that runs.
 type queue struct {
-	mu     sync.Mutex
-	wake   sync.Cond
-	jobs   []*job
-	cancel context.CancelCauseFunc // of the cell that runs; nil when none does
-	closed bool
+	mu      sync.Mutex
+	wake    sync.Cond
+	jobs    []*job
+	cancel  context.CancelCauseFunc // of the cell that runs; nil when none does
+	between bool                    // an interrupt dropped cells when none ran
+	closed  bool
 }
 
 // job is a cell: a request to execute, understood.
@@ -80,8 +81,20 @@ func (q *queue) interrupt() {
 	defer q.mu.Unlock()
 	if q.cancel != nil {
 		q.cancel(errInterrupt)
+	} else {
+		q.between = len(q.jobs) > 0
 	}
 	q.dropAll(&Failure{Name: "Cancelled", Reason: "not run: an earlier cell was interrupted"})
+}
+
+// interruptedBetween says, once, that an interrupt came when no cell ran and
+// some waited. The first of them then stands for the one that failed.
+func (q *queue) interruptedBetween() bool {
+	q.mu.Lock()
+	defer q.mu.Unlock()
+	between := q.between
+	q.between = false
+	return between
 }
 
 // drop drops the cells that wait.
