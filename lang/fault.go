@@ -168,7 +168,8 @@ func (p *parser) missingOperator(t *lexer.Token) {
 		p.fail(t, "two numbers stand side by side", "write "+a+"*"+b+" for the product; a cycle is written ("+a+" "+b+")")
 	case last.Type == tInt && (t.Type == tName || t.Value == "("):
 		p.fail(t, "an exponent or root ends with its number "+a, "write * before "+b+" for a product, or parentheses around the whole exponent")
-	case last.Type == tName && t.Type == tName && (isWordText(plain(last)) || isWordText(plain(t))):
+	case last.Type == tName && isWordText(plain(last)) && t.Type != tStr && t.Type != tBracket,
+		last.Type == tName && t.Type == tName && isWordText(plain(t)):
 		p.fail(t, reason, "a phrase is written NOUN of ..., as in trace of a; a product with *")
 	case t.Value == "(" && last.Type != tStr && t.Pos.Offset == tokenSpan(last).End:
 		p.fail(t, reason, "write * for a product; only a number before a parenthesis multiplies by itself")

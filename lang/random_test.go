@@ -204,7 +204,11 @@ func plainParens(n Node) string {
 // A random tree prints to a text that parses, gives the same tree but for
 // parentheses, and prints to itself.
 func TestRandomTreesPrintAndParse(t *testing.T) {
-	const seed, rounds = 20260, 20_000
+	const seed = 20260
+	rounds := 20_000
+	if testing.Short() {
+		rounds = 3_000
+	}
 	t.Logf("seed %d", seed)
 	r := tree{rand.New(rand.NewPCG(seed, 0))}
 	for i := range rounds {
