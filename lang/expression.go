@@ -334,7 +334,11 @@ func (p *parser) attached(start int, x Expr) Expr {
 			y := p.parentheses()
 			x = &Binary{p.place(start, x, y), "*", x, y, true}
 		case p.isBracket("("):
-			x = p.call(start, x)
+			c := p.call(start, x)
+			if len(c.Where) > 0 { // the last equation has taken what follows
+				return c
+			}
+			x = c
 		case p.isBracket("["):
 			args := p.items()
 			x = &Index{p.placeAll(start, x, args), x, args}
@@ -353,10 +357,10 @@ func (p *parser) attached(start int, x Expr) Expr {
 }
 
 // call reads (args), and the equations of an adjunction behind it.
-func (p *parser) call(start int, fn Expr) Expr {
+func (p *parser) call(start int, fn Expr) *Call {
 	args := p.items()
 	var where []Expr
-	if p.isWord(0, "where") && !p.condition {
+	if p.isWord(0, "where") && !p.condition && len(args) > 0 {
 		p.next()
 		where = p.equations(len(args))
 	}
