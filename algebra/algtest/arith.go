@@ -194,6 +194,15 @@ func (s *suite) polynomials() {
 	s.same("x^k f over x^k", op(func(z *poly.Poly) { A.Slice(z, up, k, up.N) }), f)
 	low := op(func(z *poly.Poly) { A.Slice(z, f, 0, k) })
 	s.same("f = low + x^k high", add(low, op(func(z *poly.Poly) { A.Slice(z, f, k, f.N); A.Shift(z, z, k) })), f)
+	n := f.N + s.r.IntN(70)
+	s.same("x^n f(1/x)", op(func(z *poly.Poly) { A.Reverse(z, f, n) }), s.slowReverse(f, n))
+	dot, slow, t := make(poly.Elem, A.Width()), make(poly.Elem, A.Width()), make(poly.Elem, A.Width())
+	A.Dot(w, dot, f, g)
+	for i := range min(f.N, g.N) {
+		A.MulElem(w, t, poly.Coeff(A, f, i), poly.Coeff(A, g, i))
+		A.AddElem(slow, slow, t)
+	}
+	s.sameElem("inner product", dot, slow)
 	d := func(f *poly.Poly) *poly.Poly { return op(func(z *poly.Poly) { A.Derivative(z, f) }) }
 	s.same("(fg)' = f'g + fg'", d(mul(f, g)), add(mul(d(f), g), mul(f, d(g))))
 	fr := func(f *poly.Poly) *poly.Poly { return op(func(z *poly.Poly) { A.FrobeniusCoeffs(w, z, f, 1) }) }
@@ -214,6 +223,14 @@ func (s *suite) slowMul(f, g *poly.Poly) *poly.Poly {
 		}
 	}
 	return poly.FromElems(s.A, z)
+}
+
+func (s *suite) slowReverse(f *poly.Poly, n int) *poly.Poly {
+	z := new(poly.Poly)
+	for i, a := range poly.Elems(s.A, f) {
+		s.A.Add(z, z, poly.Monomial(s.A, a, n-i))
+	}
+	return z
 }
 
 func (s *suite) division() {
@@ -310,6 +327,7 @@ func (s *suite) aliases() {
 		"multiple":   func(z, f *poly.Poly) { A.Scale(w, z, f, c) },
 		"slice":      func(z, f *poly.Poly) { A.Slice(z, f, 1, 5) },
 		"shift":      func(z, f *poly.Poly) { A.Shift(z, f, 3) },
+		"reverse":    func(z, f *poly.Poly) { A.Reverse(z, f, f.N+2) },
 		"square":     func(z, f *poly.Poly) { A.Sqr(w, z, f) },
 		"derivative": A.Derivative,
 		"Frobenius":  func(z, f *poly.Poly) { A.FrobeniusCoeffs(w, z, f, 1) },

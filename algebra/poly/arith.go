@@ -77,6 +77,11 @@ type Arith interface {
 	Slice(z, f *Poly, from, to int)
 	// Shift sets z to x^k f, k >= 0.
 	Shift(z, f *Poly, k int)
+	// Reverse sets z to x^n f(1/x), n at least the degree of f.
+	Reverse(z, f *Poly, n int)
+	// Dot sets z to the sum of the products of the coefficients of f and g of
+	// equal index: their inner product as vectors.
+	Dot(w *algebra.Work, z Elem, f, g *Poly)
 	Mul(w *algebra.Work, z, f, g *Poly)
 	Sqr(w *algebra.Work, z, f *Poly)
 	// DivRem sets q and r (either may be nil) with f = q g + r, deg r < deg g.

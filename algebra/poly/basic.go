@@ -127,13 +127,7 @@ func Monic(w *algebra.Work, A Arith, f *Poly) (*Poly, Elem) {
 // Reverse is x^n f(1/x), for n at least the degree of f.
 func Reverse(A Arith, f *Poly, n int) *Poly {
 	g := new(Poly)
-	e := make(Elem, A.Width())
-	for i := range f.N { // the highest term of g first
-		A.Coeff(e, f, i)
-		if !IsZeroElem(e) {
-			A.SetCoeff(g, n-i, e)
-		}
-	}
+	A.Reverse(g, f, n)
 	return g
 }
 

@@ -68,21 +68,26 @@ func (b *binary) split() int { return BinarySplit }
 // are split.
 var BinarySplit = 6
 
-// convolve adds up the products for one coefficient and reduces once.
 func (b *binary) convolve(w *algebra.Work, z, x, y []uint64) {
 	u := b.u
 	nx, ny := len(x)/u, len(y)/u
-	m := w.Mark()
-	sum, p := w.Dirty(2*u), w.Dirty(2*u)
-	scratch := w.Dirty(gf2x.Scratch(u, u))
 	for k := range nx + ny - 1 {
-		clear(sum)
-		for i := max(0, k-ny+1); i < min(nx, k+1); i++ {
-			gf2x.Mul(p, x[i*u:(i+1)*u], y[(k-i)*u:(k-i+1)*u], scratch)
-			xorVec(sum, sum, p)
-		}
-		copy(z[k*u:(k+1)*u], b.mod.reduce(sum))
+		from, to := max(0, k-ny+1), min(nx, k+1)
+		b.dot(w, z[k*u:(k+1)*u], x[from*u:to*u], y[(k-to+1)*u:(k-from+1)*u])
 	}
+}
+
+// dot adds up the products and reduces once.
+func (b *binary) dot(w *algebra.Work, z, x, y []uint64) {
+	u := b.u
+	m := w.Mark()
+	sum, p := w.Words(2*u), w.Dirty(2*u)
+	scratch := w.Dirty(gf2x.Scratch(u, u))
+	for i := 0; i < len(x); i += u {
+		gf2x.Mul(p, x[i:i+u], y[len(y)-u-i:len(y)-i], scratch)
+		xorVec(sum, sum, p)
+	}
+	copy(z, b.mod.reduce(sum))
 	w.Release(m)
 }
 

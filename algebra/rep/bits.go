@@ -2,6 +2,7 @@ package rep
 
 import (
 	"math/big"
+	"math/bits"
 
 	"adjoin/algebra"
 	"adjoin/algebra/internal/gf2x"
@@ -128,6 +129,29 @@ func (packed) Shift(z, f *poly.Poly, k int) {
 	words := room(z, gf2x.Words(f.N+k))
 	gf2x.Shl(words, f.W, k)
 	trimBits(z, words)
+}
+
+func (packed) Reverse(z, f *poly.Poly, n int) {
+	// Coefficient i goes to 64 len(f.W) - 1 - i first, then to n - i.
+	t := make([]uint64, len(f.W))
+	for i, x := range f.W {
+		t[len(t)-1-i] = bits.Reverse64(x)
+	}
+	words := room(z, gf2x.Words(n+1))
+	if k := n + 1 - 64*len(t); k >= 0 {
+		gf2x.Shl(words, t, k)
+	} else {
+		gf2x.Shr(words, t, -k)
+	}
+	trimBits(z, words)
+}
+
+func (packed) Dot(_ *algebra.Work, z poly.Elem, f, g *poly.Poly) {
+	var sum uint64
+	for i := range min(len(f.W), len(g.W)) {
+		sum ^= f.W[i] & g.W[i]
+	}
+	z[0] = uint64(bits.OnesCount64(sum) & 1)
 }
 
 func (packed) Mul(w *algebra.Work, z, f, g *poly.Poly) {

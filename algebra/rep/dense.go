@@ -2,6 +2,7 @@ package rep
 
 import (
 	"math/big"
+	"slices"
 
 	"adjoin/algebra"
 	"adjoin/algebra/poly"
@@ -167,6 +168,31 @@ func (d dense) Shift(z, f *poly.Poly, k int) {
 	copy(z.W[k*d.u:], fw)
 	clear(z.W[:k*d.u])
 	z.N = len(z.W) / d.u
+}
+
+func (d dense) Reverse(z, f *poly.Poly, n int) {
+	fw := f.W
+	if z == f {
+		fw = slices.Clone(fw)
+	}
+	d.resize(z, n+1)
+	low := len(z.W) - len(fw)
+	clear(z.W[:low])
+	reverse(z.W[low:], fw, d.u)
+	d.trim(z)
+}
+
+func (d dense) Dot(w *algebra.Work, z poly.Elem, f, g *poly.Poly) {
+	n := min(len(f.W), len(g.W))
+	if n == 0 {
+		clear(z)
+		return
+	}
+	m := w.Mark()
+	t := w.Dirty(n)
+	reverse(t, g.W[:n], d.u)
+	d.v.dot(w, z, f.W[:n], t)
+	w.Release(m)
 }
 
 func (d dense) Mul(w *algebra.Work, z, f, g *poly.Poly) {

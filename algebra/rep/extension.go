@@ -150,6 +150,20 @@ func (t *tower) mul(w *algebra.Work, z, a, b []uint64) {
 	w.Release(m)
 }
 
+// dot adds up the products over the base and reduces once.
+func (t *tower) dot(w *algebra.Work, z, a, b []uint64) {
+	u := t.width()
+	m := w.Mark()
+	n := (2*t.n - 1) * t.u
+	sum, p := w.Words(n), w.Dirty(n)
+	for i := 0; i < len(a); i += u {
+		product(w, t.v, p, a[i:i+u], b[len(b)-u-i:len(b)-i])
+		t.v.add(sum, sum, p)
+	}
+	t.reduce(w, z, sum)
+	w.Release(m)
+}
+
 func (t *tower) scale(w *algebra.Work, z, a, c []uint64) {
 	u := t.width()
 	for i := 0; i < len(a); i += u {

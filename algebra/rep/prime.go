@@ -47,6 +47,7 @@ func (f *wordPrime) neg(z, a []uint64)    { f.m.NegVec(z, a) }
 func (f *wordPrime) scale(_ *algebra.Work, z, a, c []uint64)     { f.m.ScaleVec(z, a, c[0]) }
 func (f *wordPrime) addScaled(_ *algebra.Work, z, a, c []uint64) { f.m.AddScaledVec(z, a, c[0]) }
 func (f *wordPrime) convolve(_ *algebra.Work, z, a, b []uint64)  { f.m.Convolve(z, a, b) }
+func (f *wordPrime) dot(_ *algebra.Work, z, a, b []uint64)       { z[0] = f.m.Dot(a, b) }
 func (f *wordPrime) mul(_ *algebra.Work, z, a, b []uint64)       { z[0] = f.m.Mul(a[0], b[0]) }
 
 func (f *wordPrime) inv(_ *algebra.Work, z, a []uint64) bool {
@@ -98,6 +99,12 @@ func (f *longPrime) addScaled(w *algebra.Work, z, a, c []uint64) {
 func (f *longPrime) convolve(w *algebra.Work, z, a, b []uint64) {
 	m := w.Mark()
 	f.m.Convolve(z, a, b, w.Dirty(f.m.Scratch()))
+	w.Release(m)
+}
+
+func (f *longPrime) dot(w *algebra.Work, z, a, b []uint64) {
+	m := w.Mark()
+	f.m.Dot(z, a, b, w.Dirty(f.m.Scratch()))
 	w.Release(m)
 }
 

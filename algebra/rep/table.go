@@ -83,6 +83,14 @@ func (t *table) convolve(_ *algebra.Work, z, x, y []uint64) {
 	}
 }
 
+func (t *table) dot(_ *algebra.Work, z, x, y []uint64) {
+	var sum uint16
+	for i, a := range x {
+		sum ^= t.exp[int(t.log[a])+int(t.log[y[len(y)-1-i]])]
+	}
+	z[0] = uint64(sum)
+}
+
 func (t *table) scale(_ *algebra.Work, z, x, c []uint64) {
 	exp := t.exp[t.log[c[0]]:]
 	for i, a := range x {

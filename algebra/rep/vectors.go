@@ -27,6 +27,9 @@ type vectors interface {
 	// empty, by the method for short ones: len(z) == len(a)+len(b)-width, and
 	// z overlaps neither.
 	convolve(w *algebra.Work, z, a, b []uint64)
+	// dot sets z to the sum of a[i] b[n-1-i] for vectors of n >= 1 elements, one
+	// coefficient of a convolution. z overlaps neither.
+	dot(w *algebra.Work, z, a, b []uint64)
 	// split is the number of coefficients from which Karatsuba's method beats
 	// convolve.
 	split() int

@@ -216,12 +216,20 @@ func (m *Mod) AddScaledVec(z, a, c, t []uint64) {
 func (m *Mod) Convolve(z, a, b, t []uint64) {
 	k := m.K
 	na, nb := len(a)/k, len(b)/k
-	t = t[:m.Scratch()]
 	for i := range na + nb - 1 {
-		clear(t)
-		for j := max(0, i-nb+1); j < min(na, i+1); j++ {
-			m.accumulate(t, a[j*k:(j+1)*k], b[(i-j)*k:(i-j+1)*k])
-		}
-		m.redc(z[i*k:(i+1)*k], t)
+		from, to := max(0, i-nb+1), min(na, i+1)
+		m.Dot(z[i*k:(i+1)*k], a[from*k:to*k], b[(i-to+1)*k:(i-from+1)*k], t)
 	}
+}
+
+// Dot sets z to the sum of a[i] b[n-1-i] for vectors of n residues: the order
+// of a convolution. z overlaps neither. t has Scratch words.
+func (m *Mod) Dot(z, a, b, t []uint64) {
+	k := m.K
+	t = t[:m.Scratch()]
+	clear(t)
+	for i := 0; i < len(a); i += k {
+		m.accumulate(t, a[i:i+k], b[len(b)-k-i:len(b)-i])
+	}
+	m.redc(z, t)
 }
