@@ -72,7 +72,7 @@ func TestOrderUnderLoad(t *testing.T) {
 
 // misbehave sends random requests, some without waiting for the answer.
 func misbehave(t *testing.T, c *client.Client, r *rand.Rand) {
-	cells := []string{"say a\nsay b", "say a\nshow b\nresult c", "fail", "panic", "sleep 2ms", "warn x\nfail", "flood 50 100", "spin\nsay never", ""}
+	cells := []string{"say a\nsay b", "say a\nshow b\nresult c", "fail", "panic", "sleep 2ms", "warn x\nfail", "flood 50 100", "sleep 1h\nsay never", ""}
 	requests := []string{"kernel_info_request", "complete_request", "inspect_request", "is_complete_request", "history_request",
 		"comm_info_request", "comm_open", "interrupt_request", "unheard_of_request", "usage_request"}
 	var pending []*client.Pending
@@ -102,7 +102,7 @@ func misbehave(t *testing.T, c *client.Client, r *rand.Rand) {
 	}
 	stop := make(chan struct{})
 	defer close(stop)
-	go func() { // spin ends only when it is interrupted
+	go func() { // that cell ends only when it is interrupted
 		for {
 			select {
 			case <-stop:

@@ -7,6 +7,7 @@ import (
 	"net"
 	"os"
 	"path/filepath"
+	"strings"
 	"sync"
 	"testing"
 	"time"
@@ -133,6 +134,7 @@ func run(t testing.TB, c *client.Client, q wire.ExecuteRequest) cell {
 func finish(t testing.TB, p *client.Pending) cell {
 	t.Helper()
 	var got cell
+	var stdout strings.Builder
 	reply, err := p.Wait(limit(t, 20*time.Second), func(a client.Arrival) {
 		if !a.Broadcast {
 			return
@@ -149,7 +151,7 @@ func finish(t testing.TB, p *client.Pending) cell {
 		case kind == "status":
 			kind = b.State
 		case b.Name == "stdout":
-			got.stdout += b.Text
+			stdout.WriteString(b.Text)
 		case kind == "execute_result":
 			got.result = b.Data["text/plain"]
 		}
@@ -158,6 +160,7 @@ func finish(t testing.TB, p *client.Pending) cell {
 	if err != nil {
 		t.Fatal(err)
 	}
+	got.stdout = stdout.String()
 	if err := json.Unmarshal(reply.Content, &got.reply); err != nil {
 		t.Fatal(err)
 	}
