@@ -100,12 +100,7 @@ func (m *Matrix) reduce(w *algebra.Work, cols int) (pivots []int) {
 	for j := 0; j < cols && len(pivots) < len(m.Rows); j++ {
 		w.Poll()
 		k := len(pivots)
-		i := k
-		for ; i < len(m.Rows); i++ {
-			if A.Coeff(e, m.Rows[i], j); !poly.IsZeroElem(e) {
-				break
-			}
-		}
+		i := m.pivot(e, k, j)
 		if i == len(m.Rows) {
 			continue
 		}
@@ -116,6 +111,7 @@ func (m *Matrix) reduce(w *algebra.Work, cols int) (pivots []int) {
 			if i == k {
 				continue
 			}
+			w.Poll()
 			if A.Coeff(e, r, j); !poly.IsZeroElem(e) {
 				A.NegElem(e, e)
 				A.AddScaled(w, r, m.Rows[k], e)
@@ -124,6 +120,17 @@ func (m *Matrix) reduce(w *algebra.Work, cols int) (pivots []int) {
 		pivots = append(pivots, j)
 	}
 	return pivots
+}
+
+// pivot is the first row from i on with an entry e, not zero, in column j, and
+// the number of rows when there is none.
+func (m *Matrix) pivot(e poly.Elem, i, j int) int {
+	for ; i < len(m.Rows); i++ {
+		if m.A.Coeff(e, m.Rows[i], j); !poly.IsZeroElem(e) {
+			break
+		}
+	}
+	return i
 }
 
 // Rank is the rank of m.
@@ -139,12 +146,7 @@ func (m *Matrix) Determinant(w *algebra.Work) poly.Elem {
 	e, inv := make(poly.Elem, A.Width()), make(poly.Elem, A.Width())
 	for j := range z.Cols {
 		w.Poll()
-		i := j
-		for ; i < z.Cols; i++ {
-			if A.Coeff(e, z.Rows[i], j); !poly.IsZeroElem(e) {
-				break
-			}
-		}
+		i := z.pivot(e, j, j)
 		if i == z.Cols {
 			clear(d)
 			return d

@@ -60,6 +60,73 @@ func leibniz(w *algebra.Work, m *linalg.Matrix) poly.Elem {
 	return d
 }
 
+// characteristic is det(x - m) from the sums of principal minors: the
+// coefficient of x^(n-k) is (-1)^k times the sum of those of size k.
+func characteristic(w *algebra.Work, m *linalg.Matrix) *poly.Poly {
+	A, n := m.A, m.Cols
+	f := new(poly.Poly)
+	for set := range 1 << n {
+		var of []int
+		for i := range n {
+			if set>>i&1 == 1 {
+				of = append(of, i)
+			}
+		}
+		minor := linalg.New(A, len(of), len(of))
+		for i, a := range of {
+			for j, b := range of {
+				minor.Set(i, j, m.At(a, b))
+			}
+		}
+		d := leibniz(w, minor)
+		if len(of)%2 == 1 {
+			A.NegElem(d, d)
+		}
+		A.Add(f, f, poly.Monomial(A, d, n-len(of)))
+	}
+	return f
+}
+
+// By the theorem of Cayley and Hamilton a matrix is a root of its
+// characteristic polynomial; and the companion matrix of f has f.
+func TestCharacteristicPolynomial(t *testing.T) {
+	w := algebra.NewWork(nil)
+	for _, p := range []int64{2, 3, 1<<31 - 1} {
+		A := rep.Prime(big.NewInt(p))
+		r := rand.New(rand.NewPCG(9, uint64(p)))
+		for n := range 14 {
+			m := random(A, r, n, n)
+			f := m.CharacteristicPolynomial(w)
+			z := linalg.New(A, n, n)
+			for i := f.Degree(); i >= 0; i-- {
+				z = z.Mul(w, m)
+				for j := range n {
+					e := z.At(j, j)
+					A.AddElem(e, e, poly.Coeff(A, f, i))
+					z.Set(j, j, e)
+				}
+			}
+			if f.Degree() != n || !same(z, linalg.New(A, n, n)) {
+				t.Fatalf("size %d over F_%d: the matrix is not a root of its characteristic polynomial", n, p)
+			}
+			g := poly.Random(A, r, n)
+			c := linalg.New(A, n, n)
+			for i := range n {
+				if i > 0 {
+					c.Set(i, i-1, A.One())
+				}
+				e := poly.Coeff(A, g, i)
+				A.NegElem(e, e)
+				c.Set(i, n-1, e)
+			}
+			A.SetCoeff(g, n, A.One())
+			if !poly.Equal(c.CharacteristicPolynomial(w), g) {
+				t.Fatalf("size %d over F_%d: the companion matrix has another characteristic polynomial", n, p)
+			}
+		}
+	}
+}
+
 func TestMatrices(t *testing.T) {
 	w := algebra.NewWork(nil)
 	k := rep.Prime(big.NewInt(2))
@@ -88,6 +155,9 @@ func TestMatrices(t *testing.T) {
 			d := sq.Determinant(w)
 			if !poly.EqualElem(d, leibniz(w, sq)) {
 				t.Fatalf("%s: determinant is wrong", name)
+			}
+			if !poly.Equal(sq.CharacteristicPolynomial(w), characteristic(w, sq)) {
+				t.Fatalf("%s: characteristic polynomial is wrong", name)
 			}
 			inv, ok := sq.Inverse(w)
 			if ok == poly.IsZeroElem(d) || ok && !same(inv.Mul(w, sq), linalg.Identity(A, n)) {

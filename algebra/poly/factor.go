@@ -3,6 +3,7 @@ package poly
 import (
 	"hash/fnv"
 	"math/big"
+	"math/bits"
 	"math/rand/v2"
 	"sort"
 
@@ -222,36 +223,43 @@ func RandomElem(A Arith, r *rand.Rand) Elem {
 // order.
 func EqualDegree(w *algebra.Work, A Arith, f *Poly, d int) []*Poly {
 	var list []*Poly
-	r := seeded(f)
-	var split func(f *Poly)
-	split = func(f *Poly) {
-		if f.N <= 1 {
-			return
-		}
-		if f.Degree() == d {
-			list = append(list, f)
-			return
-		}
-		fr := newFrobenius(w, A, f)
-		for {
-			w.Poll()
-			u := Random(A, r, f.Degree())
-			if u.N <= 1 {
-				continue
-			}
-			g := GCD(w, A, f, fr.separator(w, u, d))
-			if g.N > 1 && g.N < f.N {
-				h := new(Poly)
-				A.DivRem(w, h, nil, f, g)
-				split(g)
-				split(h)
-				return
-			}
-		}
+	if f.N <= 1 {
+		return nil
 	}
-	split(Clone(f))
+	r := seeded(f)
+	var split func(fr *frobenius)
+	split = func(fr *frobenius) {
+		f := fr.M.Poly()
+		if f.Degree() == d {
+			list = append(list, Clone(f))
+			return
+		}
+		g, h := fr.halve(w, r, d)
+		split(fr.modulo(w, g))
+		split(fr.modulo(w, h))
+	}
+	split(newFrobenius(w, A, f))
 	sort.Slice(list, func(i, j int) bool { return Compare(A, list[i], list[j]) < 0 })
 	return list
+}
+
+// halve is a factorization of the modulus, all of whose two or more
+// irreducible factors have degree d, into two.
+func (z *frobenius) halve(w *algebra.Work, r *rand.Rand, d int) (g, h *Poly) {
+	f := z.M.Poly()
+	for {
+		w.Poll()
+		u := Random(z.A, r, f.Degree())
+		if u.N <= 1 {
+			continue
+		}
+		g = GCD(w, z.A, f, z.separator(w, u, d))
+		if g.N > 1 && g.N < f.N {
+			h = new(Poly)
+			z.A.DivRem(w, h, nil, f, g)
+			return g, h
+		}
+	}
 }
 
 // separator is a polynomial that vanishes modulo about half of the
@@ -295,12 +303,12 @@ func (z *frobenius) sum(w *algebra.Work, u *Poly, d int, op func(z, f, g *Poly))
 	}
 	n := z.M.Poly().N
 	// s covers i conjugates and h is x^(q^i), for the leading bits i of d.
-	s, h, i := Clone(u), z.xq, 1
-	top := 62
-	for d>>top == 0 {
-		top--
+	s := Clone(u)
+	if d == 1 {
+		return s
 	}
-	for b := top - 1; b >= 0; b-- {
+	h, i := z.first(w), 1
+	for b := bits.Len(uint(d)) - 2; b >= 0; b-- {
 		c := NewComposer(w, z.A, z.M, h, n)
 		op(s, s, c.Apply(w, s))
 		h, i = c.Apply(w, h), 2*i
@@ -335,36 +343,4 @@ func Factorize(w *algebra.Work, A Arith, f *Poly) (lead Elem, list []Factor) {
 	}
 	SortFactors(A, list)
 	return lead, list
-}
-
-// Root is a root with its multiplicity.
-type Root struct {
-	A Elem
-	E int
-}
-
-// Roots is the list of the roots of f, not zero, in K, in the order of their
-// codes.
-func Roots(w *algebra.Work, A Arith, f *Poly) []Root {
-	var list []Root
-	for _, s := range Squarefree(w, A, f) {
-		for _, g := range linear(w, A, s.F) {
-			e := Coeff(A, g, 0)
-			A.NegElem(e, e)
-			list = append(list, Root{e, s.E})
-		}
-	}
-	sort.Slice(list, func(i, j int) bool { return CompareElem(A, list[i].A, list[j].A) < 0 })
-	return list
-}
-
-// linear is the list of the linear factors of a squarefree monic f.
-func linear(w *algebra.Work, A Arith, f *Poly) []*Poly {
-	if f.N <= 1 {
-		return nil
-	}
-	h := new(Poly)
-	A.Sub(h, FrobeniusMod(w, A, f), X(A))
-	g := GCD(w, A, f, h)
-	return EqualDegree(w, A, g, 1)
 }

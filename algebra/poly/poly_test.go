@@ -130,7 +130,7 @@ func TestPowersAndCompositions(t *testing.T) {
 		for range 20 {
 			m := monic(A, r, 1+r.IntN(9))
 			f, g := poly.Random(A, r, 8), poly.Random(A, r, 8)
-			e := r.IntN(200)
+			e := r.IntN(200) * r.IntN(2)
 			want := poly.Pow(w, A, f, e)
 			A.DivRem(w, nil, want, want, m)
 			if !poly.Equal(poly.PowMod(w, A, f, big.NewInt(int64(e)), m), want) {

@@ -35,6 +35,9 @@ func powModulus(w *algebra.Work, A Arith, M Modulus, f *Poly, e *big.Int) *Poly 
 		M.MulMod(w, t, table[i-1], f)
 		table = append(table, t)
 	}
+	if e.Sign() == 0 {
+		return One(A)
+	}
 	var z *Poly
 	for i := (e.BitLen() - 1) / k * k; i >= 0; i -= k {
 		w.Poll()
@@ -118,15 +121,15 @@ func FrobeniusMod(w *algebra.Work, A Arith, m *Poly) *Poly {
 type frobenius struct {
 	A     Arith
 	M     Modulus
-	x, xq *Poly
-	cheap bool // raising to the q-th power costs less than a composition
+	x     *Poly
+	xq    *Poly // x^q, or nil as long as nothing needs it
+	cheap bool  // raising to the q-th power costs less than a composition
 	comp  *Composer
 }
 
 func newFrobenius(w *algebra.Work, A Arith, f *Poly) *frobenius {
 	z := &frobenius{A: A, M: A.NewModulus(w, f), x: new(Poly)}
 	A.DivRem(w, nil, z.x, X(A), f)
-	z.xq = powModulus(w, A, z.M, z.x, A.Order())
 	s := 1
 	for s*s < f.N {
 		s++
@@ -135,13 +138,31 @@ func newFrobenius(w *algebra.Work, A Arith, f *Poly) *frobenius {
 	return z
 }
 
+// modulo is the same for a divisor g of the modulus.
+func (z *frobenius) modulo(w *algebra.Work, g *Poly) *frobenius {
+	y := newFrobenius(w, z.A, g)
+	if z.xq != nil {
+		y.xq = new(Poly)
+		y.M.Reduce(w, y.xq, z.xq)
+	}
+	return y
+}
+
+// first is x^q.
+func (z *frobenius) first(w *algebra.Work) *Poly {
+	if z.xq == nil {
+		z.xq = powModulus(w, z.A, z.M, z.x, z.A.Order())
+	}
+	return z.xq
+}
+
 // next is h^q, for h reduced: h(x^q).
 func (z *frobenius) next(w *algebra.Work, h *Poly) *Poly {
 	if z.cheap {
 		return powModulus(w, z.A, z.M, h, z.A.Order())
 	}
 	if z.comp == nil {
-		z.comp = NewComposer(w, z.A, z.M, z.xq, z.M.Poly().N)
+		z.comp = NewComposer(w, z.A, z.M, z.first(w), z.M.Poly().N)
 	}
 	return z.comp.Apply(w, h)
 }
