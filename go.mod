@@ -5,6 +5,7 @@ go 1.26.0
 require (
 	codeberg.org/go-pdf/fpdf v0.12.0 // indirect
 	github.com/alecthomas/participle/v2 v2.1.4 // indirect
+	github.com/go-fonts/liberation v0.3.3 // indirect
 	github.com/go-zeromq/goczmq/v4 v4.2.2 // indirect
 	github.com/go-zeromq/zmq4 v0.17.0 // indirect
 	github.com/inconshreveable/mousetrap v1.1.0 // indirect
