@@ -62,11 +62,23 @@ func xorVec(z, x, y []uint64) {
 	}
 }
 
-func (b *binary) split() int { return BinarySplit }
+func (b *binary) split() int  { return BinarySplit }
+func (b *binary) newton() int { return BinaryNewton }
 
-// BinarySplit is the number of coefficients from which products over F_{2^n}
-// are split.
-var BinarySplit = 6
+// Crossovers for F_{2^n} as for word primes.
+var (
+	BinarySplit  = 6
+	BinaryNewton = 6
+)
+
+// square squares the coefficients, as the characteristic is 2.
+func (b *binary) square(w *algebra.Work, z, x []uint64) {
+	u := b.u
+	clear(z)
+	for i := 0; i < len(x); i += u {
+		b.sqr(w, z[2*i:2*i+u], x[i:i+u])
+	}
+}
 
 func (b *binary) convolve(w *algebra.Work, z, x, y []uint64) {
 	u := b.u

@@ -221,7 +221,17 @@ func (d dense) set(z *poly.Poly, words []uint64) {
 	d.trim(z)
 }
 
-func (d dense) Sqr(w *algebra.Work, z, f *poly.Poly) { d.Mul(w, z, f, f) }
+func (d dense) Sqr(w *algebra.Work, z, f *poly.Poly) {
+	if f.N == 0 {
+		z.W, z.N = z.W[:0], 0
+		return
+	}
+	m := w.Mark()
+	t := w.Dirty((2*f.N - 1) * d.u)
+	square(w, d.v, t, f.W)
+	d.set(z, t)
+	w.Release(m)
+}
 
 func (d dense) Derivative(z, f *poly.Poly) {
 	n := f.N - 1
@@ -260,10 +270,6 @@ func (d dense) FrobeniusCoeffs(w *algebra.Work, z, f *poly.Poly, k int) {
 	z.N = len(z.W) / d.u
 }
 
-// DivisionThreshold is the number of coefficients of quotient and divisor from
-// which division goes by the inverse power series.
-var DivisionThreshold = 128
-
 func (d dense) DivRem(w *algebra.Work, q, r, f, g *poly.Poly) {
 	if f.N < g.N {
 		if r != nil && r != f {
@@ -274,7 +280,8 @@ func (d dense) DivRem(w *algebra.Work, q, r, f, g *poly.Poly) {
 		}
 		return
 	}
-	if k := f.N - g.N + 1; k >= DivisionThreshold && g.N >= DivisionThreshold {
+	// The series costs about two products more.
+	if least := 3 * d.v.newton(); f.N-g.N+1 >= least && g.N >= least {
 		poly.DivRemBySeries(w, d, q, r, f, g)
 		return
 	}
@@ -330,7 +337,7 @@ type denseModulus struct {
 func (d dense) NewModulus(w *algebra.Work, m *poly.Poly) poly.Modulus {
 	z := &denseModulus{d: d, m: &poly.Poly{W: append([]uint64(nil), m.W...), N: m.N}, inv: make([]uint64, d.u)}
 	d.v.inv(w, z.inv, m.W[(m.N-1)*d.u:])
-	if m.N > d.v.split() {
+	if m.N > d.v.newton() {
 		z.series = poly.InverseSeries(w, d, poly.Reverse(d, m, m.Degree()), m.N)
 	}
 	return z
@@ -357,7 +364,7 @@ func (m *denseModulus) reduce(w *algebra.Work, t []uint64) []uint64 {
 	if len(t) <= n {
 		return t
 	}
-	if k := len(t) - n; m.series == nil || k < m.d.v.split()*u {
+	if k := len(t) - n; m.series == nil || k < m.d.v.newton()*u {
 		m.d.divide(w, nil, t, m.m.W, m.inv)
 		return t[:n]
 	} else {
@@ -397,4 +404,14 @@ func (m *denseModulus) MulMod(w *algebra.Work, z, f, g *poly.Poly) {
 	w.Release(mark)
 }
 
-func (m *denseModulus) SqrMod(w *algebra.Work, z, f *poly.Poly) { m.MulMod(w, z, f, f) }
+func (m *denseModulus) SqrMod(w *algebra.Work, z, f *poly.Poly) {
+	if f.N == 0 {
+		z.W, z.N = z.W[:0], 0
+		return
+	}
+	mark := w.Mark()
+	t := w.Dirty((2*f.N - 1) * m.d.u)
+	square(w, m.d.v, t, f.W)
+	m.d.set(z, m.reduce(w, t))
+	w.Release(mark)
+}

@@ -111,7 +111,11 @@ func (t *tower) neg(z, a []uint64)    { t.v.neg(z, a) }
 // Products of polynomials go by Kronecker's substitution: coefficients are
 // laid 2n-1 elements of the base apart, so that one product over the base
 // holds all of them. Karatsuba's method then works inside that product.
-func (t *tower) split() int { return 1 << 62 }
+func (t *tower) split() int  { return 1 << 62 }
+func (t *tower) newton() int { return TowerNewton }
+
+// TowerNewton is for towers what WordNewton is for word primes.
+var TowerNewton = 4
 
 func (t *tower) convolve(w *algebra.Work, z, a, b []uint64) {
 	u := t.width()
@@ -121,6 +125,19 @@ func (t *tower) convolve(w *algebra.Work, z, a, b []uint64) {
 	p := w.Dirty((na+nb-2)*block + (2*t.n-1)*t.u)
 	product(w, t.v, p, t.apart(w, a, block), t.apart(w, b, block))
 	for i := range na + nb - 1 {
+		t.reduce(w, z[i*u:(i+1)*u], p[i*block:(i+1)*block])
+	}
+	w.Release(m)
+}
+
+func (t *tower) square(w *algebra.Work, z, a []uint64) {
+	u := t.width()
+	n := len(a) / u
+	block := (2*t.n - 1) * t.u
+	m := w.Mark()
+	p := w.Dirty((2*n - 1) * block)
+	square(w, t.v, p, t.apart(w, a, block))
+	for i := range 2*n - 1 {
 		t.reduce(w, z[i*u:(i+1)*u], p[i*block:(i+1)*block])
 	}
 	w.Release(m)

@@ -32,12 +32,16 @@ func (f *wordPrime) degree() int              { return 1 }
 func (f *wordPrime) width() int               { return 1 }
 func (f *wordPrime) one() []uint64            { return bitOne }
 func (f *wordPrime) split() int               { return WordSplit }
+func (f *wordPrime) newton() int              { return WordNewton }
 
-// WordSplit is the number of coefficients from which products over word primes
-// are split; LongSplit is that for longer primes.
+// Crossovers, in coefficients: Split is where products are split in two,
+// Newton where division by a fixed modulus goes through its inverse power
+// series. Word is for word primes, Long for longer ones.
 var (
-	WordSplit = 48
-	LongSplit = 16
+	WordSplit  = 48
+	WordNewton = 48
+	LongSplit  = 16
+	LongNewton = 16
 )
 
 func (f *wordPrime) add(z, a, b []uint64) { f.m.AddVec(z, a, b) }
@@ -47,6 +51,7 @@ func (f *wordPrime) neg(z, a []uint64)    { f.m.NegVec(z, a) }
 func (f *wordPrime) scale(_ *algebra.Work, z, a, c []uint64)     { f.m.ScaleVec(z, a, c[0]) }
 func (f *wordPrime) addScaled(_ *algebra.Work, z, a, c []uint64) { f.m.AddScaledVec(z, a, c[0]) }
 func (f *wordPrime) convolve(_ *algebra.Work, z, a, b []uint64)  { f.m.Convolve(z, a, b) }
+func (f *wordPrime) square(_ *algebra.Work, z, a []uint64)       { f.m.Square(z, a) }
 func (f *wordPrime) dot(_ *algebra.Work, z, a, b []uint64)       { z[0] = f.m.Dot(a, b) }
 func (f *wordPrime) mul(_ *algebra.Work, z, a, b []uint64)       { z[0] = f.m.Mul(a[0], b[0]) }
 
@@ -79,6 +84,7 @@ func (f *longPrime) degree() int              { return 1 }
 func (f *longPrime) width() int               { return f.m.K }
 func (f *longPrime) one() []uint64            { return f.m.One() }
 func (f *longPrime) split() int               { return LongSplit }
+func (f *longPrime) newton() int              { return LongNewton }
 
 func (f *longPrime) add(z, a, b []uint64) { f.m.AddVec(z, a, b) }
 func (f *longPrime) sub(z, a, b []uint64) { f.m.SubVec(z, a, b) }
@@ -101,6 +107,8 @@ func (f *longPrime) convolve(w *algebra.Work, z, a, b []uint64) {
 	f.m.Convolve(z, a, b, w.Dirty(f.m.Scratch()))
 	w.Release(m)
 }
+
+func (f *longPrime) square(w *algebra.Work, z, a []uint64) { f.convolve(w, z, a, a) }
 
 func (f *longPrime) dot(w *algebra.Work, z, a, b []uint64) {
 	m := w.Mark()

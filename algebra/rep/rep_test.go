@@ -68,12 +68,16 @@ func TestArith(t *testing.T) {
 	}
 }
 
-func TestSplitProducts(t *testing.T) {
-	w, l, b := rep.WordSplit, rep.LongSplit, rep.BinarySplit
-	defer func() { rep.WordSplit, rep.LongSplit, rep.BinarySplit = w, l, b }()
-	rep.WordSplit, rep.LongSplit, rep.BinarySplit = 2, 2, 2
+func TestCrossovers(t *testing.T) {
+	for _, c := range []*int{
+		&rep.WordSplit, &rep.LongSplit, &rep.BinarySplit, &rep.TableSplit,
+		&rep.WordNewton, &rep.LongNewton, &rep.BinaryNewton, &rep.TableNewton, &rep.TowerNewton,
+	} {
+		defer func(old int) { *c = old }(*c)
+		*c = 2
+	}
 	list := fields()
-	for _, name := range []string{"F_3", "F_p 63 bits", "F_p 127 bits", "F_2^127", "F_3^5", "((F_4)^3)^2"} {
+	for _, name := range []string{"F_3", "F_p 63 bits", "F_p 127 bits", "F_256", "F_2^127", "F_3^5", "((F_4)^3)^2"} {
 		A := list[name]
 		t.Run(name, func(t *testing.T) { algtest.Arith(t, A, 2) })
 	}

@@ -63,7 +63,21 @@ func (t *table) slowMul(x, y uint64) uint64 {
 	return z
 }
 
-func (t *table) split() int { return 64 }
+func (t *table) split() int  { return TableSplit }
+func (t *table) newton() int { return TableNewton }
+
+// Crossovers for table fields as for word primes.
+var (
+	TableSplit  = 64
+	TableNewton = 64
+)
+
+func (t *table) square(w *algebra.Work, z, x []uint64) {
+	clear(z)
+	for i := range x {
+		t.mul(w, z[2*i:2*i+1], x[i:i+1], x[i:i+1])
+	}
+}
 
 func (t *table) mul(_ *algebra.Work, z, x, y []uint64) {
 	z[0] = uint64(t.exp[int(t.log[x[0]])+int(t.log[y[0]])])

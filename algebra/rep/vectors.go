@@ -27,12 +27,17 @@ type vectors interface {
 	// empty, by the method for short ones: len(z) == len(a)+len(b)-width, and
 	// z overlaps neither.
 	convolve(w *algebra.Work, z, a, b []uint64)
+	// square is convolve of a with itself.
+	square(w *algebra.Work, z, a []uint64)
 	// dot sets z to the sum of a[i] b[n-1-i] for vectors of n >= 1 elements, one
 	// coefficient of a convolution. z overlaps neither.
 	dot(w *algebra.Work, z, a, b []uint64)
 	// split is the number of coefficients from which Karatsuba's method beats
 	// convolve.
 	split() int
+	// newton is the number of coefficients from which division through the
+	// inverse power series beats long division, when the series is at hand.
+	newton() int
 
 	mul(w *algebra.Work, z, a, b []uint64)
 	inv(w *algebra.Work, z, a []uint64) bool
@@ -88,6 +93,31 @@ func product(w *algebra.Work, v vectors, z, a, b []uint64) {
 	v.sub(mid, mid, low)
 	v.sub(mid[:len(high)], mid[:len(high)], high)
 	v.add(z[h:h+len(mid)], z[h:h+len(mid)], mid)
+}
+
+// square is product of a with itself.
+func square(w *algebra.Work, v vectors, z, a []uint64) {
+	u := v.width()
+	if n := len(a) / u; n < v.split() || n < 2 {
+		v.square(w, z, a)
+		return
+	}
+	w.Poll()
+	m := w.Mark()
+	h := (len(a)/u + 1) / 2 * u
+	a0, a1 := a[:h], a[h:]
+	s, mid := w.Dirty(h), w.Dirty(2*h-u)
+	copy(s, a0)
+	v.add(s[:len(a1)], s[:len(a1)], a1)
+	square(w, v, mid, s)
+	low, high := z[:2*h-u], z[2*h:]
+	square(w, v, low, a0)
+	square(w, v, high, a1)
+	clear(z[2*h-u : 2*h])
+	v.sub(mid, mid, low)
+	v.sub(mid[:len(high)], mid[:len(high)], high)
+	v.add(z[h:h+len(mid)], z[h:h+len(mid)], mid)
+	w.Release(m)
 }
 
 // isZero says whether all words of a are zero.

@@ -210,3 +210,18 @@ func (m *Mod) Convolve(z, a, b []uint64) {
 		z[k] = m.Dot(a[from:to], b[k-to+1:k-from+1])
 	}
 }
+
+// Square is Convolve of a with itself: the products of two different entries
+// are taken once.
+func (m *Mod) Square(z, a []uint64) {
+	n := len(a)
+	for k := range z {
+		from, to := max(0, k-n+1), (k+1)/2 // pairs i < k-i
+		s := m.Dot(a[from:to], a[k-to+1:k-from+1])
+		s = m.Add(s, s)
+		if k%2 == 0 {
+			s = m.Add(s, m.Mul(a[k/2], a[k/2]))
+		}
+		z[k] = s
+	}
+}

@@ -104,6 +104,28 @@ func TestConvolve(t *testing.T) {
 	}
 }
 
+func TestSquare(t *testing.T) {
+	r := rand.New(rand.NewPCG(4, 4))
+	for _, p := range primes {
+		m := New(p)
+		for n := 1; n <= 130; n++ {
+			a := residues(r, n, p)
+			z, want := make([]uint64, 2*n), make([]uint64, 2*n-1)
+			z[2*n-1] = 77
+			m.Square(z[:2*n-1], a)
+			m.Convolve(want, a, a)
+			for i := range want {
+				if z[i] != want[i] {
+					t.Fatalf("square of length %d modulo %d is wrong at %d", n, p, i)
+				}
+			}
+			if z[2*n-1] != 77 {
+				t.Fatal("the square writes beyond its result")
+			}
+		}
+	}
+}
+
 func TestLongDot(t *testing.T) {
 	for _, p := range primes {
 		m := New(p)
