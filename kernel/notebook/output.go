@@ -65,9 +65,9 @@ func (c *collector) stream(name, text string) {
 }
 
 // Text is the text of a stream.
-func (o Output) Text() string { return text(o["text"]) }
+func (o Output) Text() string { return textOf(o["text"]) }
 
-func text(v any) string {
+func textOf(v any) string {
 	if l, ok := v.([]string); ok {
 		return strings.Join(l, "")
 	}
@@ -96,7 +96,7 @@ func fileData(v any) map[string]any {
 }
 
 // Form is the text of one form of an output's data, "" when it has none.
-func (o Output) Form(mime string) string { return text(object(o["data"])[mime]) }
+func (o Output) Form(mime string) string { return textOf(object(o["data"])[mime]) }
 
 // Kind is the type of the output.
-func (o Output) Kind() string { return text(o["output_type"]) }
+func (o Output) Kind() string { return textOf(o["output_type"]) }

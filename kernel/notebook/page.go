@@ -7,9 +7,6 @@ import (
 	"html/template"
 	"regexp"
 	"strings"
-
-	"github.com/yuin/goldmark"
-	"github.com/yuin/goldmark/extension"
 )
 
 //go:embed page.css
@@ -50,18 +47,19 @@ type pageOutput struct {
 	HTML  template.HTML
 }
 
-// Page is the notebook as a page of HTML that needs nothing but itself.
-func (n *Notebook) Page(title string) ([]byte, error) {
-	markdown := goldmark.New(goldmark.WithExtensions(extension.Table))
+// Page is the notebook as a page of HTML that needs nothing but itself. Dir is
+// where the pictures lie that the text names; title stands for a missing
+// heading.
+func (n *Notebook) Page(title, dir string) ([]byte, error) {
 	var cells []pageCell
 	for _, c := range n.Cells {
 		switch c.Kind {
 		case "markdown":
-			var b bytes.Buffer
-			if err := markdown.Convert([]byte(c.Source), &b); err != nil {
+			text, err := markdown(c, dir)
+			if err != nil {
 				return nil, err
 			}
-			cells = append(cells, pageCell{Text: template.HTML(b.String())})
+			cells = append(cells, pageCell{Text: template.HTML(text)})
 		case "code":
 			p := pageCell{Code: c.Source}
 			for _, o := range c.Outputs {
@@ -121,16 +119,17 @@ func (o Output) traceback() string {
 var ansi = regexp.MustCompile("\x1b\\[[0-9;]*m")
 
 // pageOutputOf is an output in the form that reads best without help from
-// anywhere: tables and figures as they are, formulas as plain text.
+// anywhere: tables and figures as they are, formulas as MathML or, where that
+// cannot be, as plain text.
 func pageOutputOf(o Output) pageOutput {
 	switch o.Kind() {
 	case "stream":
-		return pageOutput{"stream " + text(o["name"]), pre(o.Text())}
+		return pageOutput{"stream " + textOf(o["name"]), pre(o.Text())}
 	case "error":
 		return pageOutput{"error", pre(o.traceback())}
 	}
 	if h := o.Form("text/html"); h != "" {
-		return pageOutput{"shown", template.HTML(h)}
+		return pageOutput{"shown", template.HTML(typesetHTML(h))}
 	}
 	if s := o.Form("image/svg+xml"); s != "" {
 		return pageOutput{"shown", picture("image/svg+xml", base64.StdEncoding.EncodeToString([]byte(s)), o.Form("text/plain"))}
@@ -139,6 +138,9 @@ func pageOutputOf(o Output) pageOutput {
 		if s := o.Form(mime); s != "" {
 			return pageOutput{"shown", picture(mime, strings.ReplaceAll(s, "\n", ""), o.Form("text/plain"))}
 		}
+	}
+	if math, ok := formula(o.Form("text/latex")); ok {
+		return pageOutput{"shown", template.HTML(math)}
 	}
 	return pageOutput{"shown", pre(o.Form("text/plain"))}
 }
