@@ -1,0 +1,89 @@
+package field
+
+import (
+	"fmt"
+
+	"adjoin/algebra"
+	"adjoin/algebra/integer"
+)
+
+// References:
+//
+//	[LN] R. Lidl, H. Niederreiter, Finite Fields, 2nd edition 1997, theorem 2.6:
+//	  a field of p^n elements has one subfield of p^d for each d | n, and no
+//	  others.
+
+// Subfield is a subfield of a field L.
+type Subfield struct {
+	Degree            int        // over F_p
+	Field             *Field     // the standard field of that degree
+	Into              *Map       // its fixed embedding into L
+	Generator         Elem       // the image of its generator, in L
+	MinimalPolynomial Polynomial // of that, over F_p
+}
+
+// Subfields lists all subfields of L by increasing degree, the prime field and
+// L itself included: one for each divisor of the absolute degree [LN].
+func Subfields(w *algebra.Work, L *Field) (list []*Subfield, err error) {
+	defer algebra.Catch(&err)
+	for _, d := range integer.DivisorsInt(L.absolute) {
+		w.Poll()
+		K, err := Standard(w, L.p, d)
+		if err != nil {
+			return nil, err
+		}
+		m, err := Embed(w, K, L)
+		if err != nil {
+			return nil, err
+		}
+		list = append(list, &Subfield{d, K, m, m.image, K.Modulus()})
+	}
+	return list, nil
+}
+
+// IsSubfield says whether L has a subfield isomorphic to K; it has at most
+// one. The witness is the fixed embedding.
+func IsSubfield(w *algebra.Work, K, L *Field) (v algebra.Verdict, err error) {
+	source := "R. Lidl and H. Niederreiter, Finite Fields, 1997, theorem 2.6"
+	switch {
+	case K.p.Cmp(L.p) != 0:
+		return algebra.Because(false, "the characteristics %s and %s differ", K.p, L.p), nil
+	case L.absolute%K.absolute != 0:
+		v = algebra.Because(false, "%s = %s^%d and %s = %s^%d, and %d does not divide %d", K.orderText(), K.p, K.absolute, L.orderText(), L.p, L.absolute, K.absolute, L.absolute)
+		v.Evidence.Source = source
+		return v, nil
+	}
+	m, err := Embed(w, K, L)
+	if err != nil {
+		return v, err
+	}
+	v = algebra.Because(true, "%d divides %d", K.absolute, L.absolute)
+	v.Evidence.Source = source
+	v.Evidence = v.Evidence.With(fmt.Sprintf("root of %s", K.Modulus()), m.image)
+	return v, nil
+}
+
+// Compositum is the smallest field in which K and L lie along the fixed
+// embeddings: see Common.
+func Compositum(w *algebra.Work, K, L *Field) (*Field, error) {
+	M, _, _, err := Common(w, K, L)
+	return M, err
+}
+
+// Intersection is the largest field that lies in both K and L: K or L where it
+// is one of them, and the standard field otherwise. It is an error of kind
+// Mismatch when the characteristics differ.
+func Intersection(w *algebra.Work, K, L *Field) (*Field, error) {
+	if K.p.Cmp(L.p) != 0 {
+		_, err := Embed(w, K, L)
+		return nil, err
+	}
+	switch d := gcd(K.absolute, L.absolute); {
+	case d == K.absolute && (d != L.absolute || inTower(K, L)):
+		return K, nil
+	case d == L.absolute:
+		return L, nil
+	default:
+		return Standard(w, K.p, d)
+	}
+}
