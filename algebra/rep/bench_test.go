@@ -8,7 +8,7 @@ import (
 	"adjoin/algebra/poly"
 )
 
-var benched = []string{"F_2", "F_p 31 bits", "F_p 61 bits", "F_p 127 bits", "F_p 521 bits", "F_256", "F_2^11", "F_2^64", "F_2^127", "F_2^571", "F_3^5", "F_p^3 31 bits", "((F_4)^3)^2"}
+var benched = []string{"F_2", "F_p 31 bits", "F_p 61 bits", "F_p 127 bits", "F_p 521 bits", "F_256", "F_2^11", "F_2^64", "F_2^127", "F_2^571", "F_3^5", "F_3^5 generic", "F_3^9", "F_p^3 31 bits", "((F_4)^3)^2", "generic tower"}
 
 func BenchmarkElem(b *testing.B) {
 	w := algebra.NewWork(nil)

@@ -6,6 +6,7 @@
 //	F_p, p < 2^63              one word an element
 //	F_p, longer p              Montgomery residues of several words
 //	F_{2^n} over F_2           packed residues; tables of logarithms when small
+//	other orders to 4096       Zech's logarithms
 //	anything else              residues of polynomials over the base, whatever
 //	                           that is, so towers of any height
 //

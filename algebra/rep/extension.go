@@ -30,7 +30,12 @@ func Extend(w *algebra.Work, base poly.Arith, m *poly.Poly) *Extension {
 		e := newTable(newBinary(m))
 		return &Extension{newDense(e), e}
 	}
-	return Generic(w, base, m)
+	g := Generic(w, base, m)
+	if t, ok := g.e.(*tower); ok && t.q.Cmp(big.NewInt(ZechOrder)) <= 0 {
+		e := newZech(w, t)
+		return &Extension{newDense(e), e}
+	}
+	return g
 }
 
 // Generic is Extend without tables of logarithms: the elements are residues of

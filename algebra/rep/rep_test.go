@@ -31,6 +31,11 @@ func extend(A poly.Arith, n int) *rep.Extension {
 	return rep.Extend(w, A, poly.FindIrreducible(w, A, n))
 }
 
+func generic(A poly.Arith, n int) *rep.Extension {
+	w := algebra.NewWork(nil)
+	return rep.Generic(w, A, poly.FindIrreducible(w, A, n))
+}
+
 var fields = sync.OnceValue(func() map[string]poly.Arith {
 	prime := func(s string) poly.Arith { return rep.Prime(number(s)) }
 	f4 := extend(prime("2"), 2)
@@ -52,11 +57,14 @@ var fields = sync.OnceValue(func() map[string]poly.Arith {
 		"F_2^127":       extend(prime("2"), 127),
 		"F_2^571":       extend(prime("2"), 571),
 		"F_3^5":         extend(prime("3"), 5),
+		"F_3^5 generic": generic(prime("3"), 5),
+		"F_3^9":         extend(prime("3"), 9),
 		"F_5^2":         extend(prime("5"), 2),
 		"F_p^2 long":    extend(rep.Prime(mersenne(127)), 2),
 		"F_p^3 31 bits": extend(rep.Prime(mersenne(31)), 3),
 		"(F_4)^3":       extend(f4, 3),
 		"((F_4)^3)^2":   extend(extend(f4, 3), 2),
+		"generic tower": generic(generic(f4, 3), 2),
 		"(F_9)^3":       extend(extend(prime("3"), 2), 3),
 		"(F_2^12)^2":    extend(extend(prime("2"), 12), 3),
 	}
@@ -71,13 +79,13 @@ func TestArith(t *testing.T) {
 func TestCrossovers(t *testing.T) {
 	for _, c := range []*int{
 		&rep.WordSplit, &rep.LongSplit, &rep.BinarySplit, &rep.TableSplit,
-		&rep.WordNewton, &rep.LongNewton, &rep.BinaryNewton, &rep.TableNewton, &rep.TowerNewton,
+		&rep.ZechSplit, &rep.ZechNewton, &rep.WordNewton, &rep.LongNewton, &rep.BinaryNewton, &rep.TableNewton, &rep.TowerNewton,
 	} {
 		defer func(old int) { *c = old }(*c)
 		*c = 2
 	}
 	list := fields()
-	for _, name := range []string{"F_3", "F_p 63 bits", "F_p 127 bits", "F_256", "F_2^127", "F_3^5", "((F_4)^3)^2"} {
+	for _, name := range []string{"F_3", "F_p 63 bits", "F_p 127 bits", "F_256", "F_2^127", "F_3^5", "F_3^5 generic", "((F_4)^3)^2", "generic tower"} {
 		A := list[name]
 		t.Run(name, func(t *testing.T) { algtest.Arith(t, A, 2) })
 	}
@@ -89,6 +97,17 @@ func TestRepresentationsAgree(t *testing.T) {
 		k := rep.Prime(big.NewInt(2))
 		m := poly.FindIrreducible(w, k, n)
 		algtest.Agree(t, rep.Extend(w, k, m), rep.Generic(w, k, m), uint64(n))
+	}
+	f4 := extend(rep.Prime(big.NewInt(2)), 2)
+	for _, c := range []struct {
+		k poly.Arith
+		n int
+	}{
+		{rep.Prime(big.NewInt(3)), 1}, {rep.Prime(big.NewInt(3)), 5}, {rep.Prime(big.NewInt(5)), 2}, {rep.Prime(big.NewInt(61)), 2},
+		{f4, 2}, {f4, 3}, {extend(f4, 3), 2}, {extend(rep.Prime(big.NewInt(3)), 2), 3},
+	} {
+		m := poly.FindIrreducible(w, c.k, c.n)
+		algtest.Agree(t, rep.Extend(w, c.k, m), rep.Generic(w, c.k, m), uint64(c.n))
 	}
 }
 
@@ -114,7 +133,7 @@ func TestByteField(t *testing.T) {
 func TestNoAllocation(t *testing.T) {
 	w := algebra.NewWork(nil)
 	list := fields()
-	for _, name := range []string{"F_2", "F_p 61 bits", "F_p 127 bits", "F_256", "F_2^127", "F_3^5", "((F_4)^3)^2"} {
+	for _, name := range []string{"F_2", "F_p 61 bits", "F_p 127 bits", "F_256", "F_2^127", "F_3^5", "F_3^5 generic", "((F_4)^3)^2", "generic tower"} {
 		A := list[name]
 		r := rand.New(rand.NewPCG(1, 1))
 		f, g, z := poly.Random(A, r, 21), poly.Random(A, r, 20), new(poly.Poly)
