@@ -25,7 +25,25 @@ type Diagram struct {
 	Edges   []Edge
 }
 
-// Bundle has the figure in each form.
+// Largest diagram that is drawn; a larger one has its outline only, since no
+// page would hold it.
+const (
+	mostNodes = 200
+	mostEdges = 1000
+)
+
+// Bundle has the figure as an outline, as an image in HTML, as SVG and as PDF.
 func (d Diagram) Bundle() Bundle {
-	return Bundle{Data: map[string]any{MIMEText: d.Text()}}
+	b := Bundle{Data: map[string]any{MIMEText: d.Text()}}
+	if len(d.Nodes) == 0 || len(d.Nodes) > mostNodes || len(d.Edges) > mostEdges {
+		return b
+	}
+	pic := d.draw()
+	svg := d.svg(pic)
+	b.Data[MIMESVG] = svg
+	b.Data[MIMEHTML] = d.html(svg)
+	if pdf, err := d.pdf(pic); err == nil {
+		b.Data[MIMEPDF] = pdf
+	}
+	return b
 }
