@@ -124,7 +124,7 @@ var ansi = regexp.MustCompile("\x1b\\[[0-9;]*m")
 func pageOutputOf(o Output) pageOutput {
 	switch o.Kind() {
 	case "stream":
-		return pageOutput{"stream " + textOf(o["name"]), pre(o.Text())}
+		return pageOutput{"stream " + textOf(o["name"]), pre(strings.TrimSuffix(o.Text(), "\n"))}
 	case "error":
 		return pageOutput{"error", pre(o.traceback())}
 	}
