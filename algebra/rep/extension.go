@@ -76,6 +76,7 @@ type tower struct {
 	u    int // width of the base
 	q    *big.Int
 	unit []uint64
+	conj conjugates
 }
 
 func newTower(w *algebra.Work, k poly.Arith, v vectors, m *poly.Poly) *tower {
@@ -211,22 +212,6 @@ func (t *tower) inv(w *algebra.Work, z, a []uint64) bool {
 		clear(z[len(f.W):])
 	}
 	return ok
-}
-
-// frobenius raises to the p-th power k times, in the base where a lies in it.
-func (t *tower) frobenius(w *algebra.Work, z, a []uint64, k int) {
-	copy(z, a)
-	if isZero(a[t.u:]) {
-		t.v.frobenius(w, z[:t.u], a[:t.u], k%t.v.degree())
-		return
-	}
-	m := w.Mark()
-	s := w.Dirty(t.width())
-	for range k {
-		copy(s, z)
-		power(w, t, z, s, t.characteristic())
-	}
-	w.Release(m)
 }
 
 func (t *tower) setInt(z []uint64, n *big.Int) {

@@ -129,15 +129,3 @@ func isZero(a []uint64) bool {
 	}
 	return true
 }
-
-// power sets z to a^e, e >= 0. z does not overlap a.
-func power(w *algebra.Work, v vectors, z, a []uint64, e *big.Int) {
-	copy(z, v.one())
-	for i := e.BitLen() - 1; i >= 0; i-- {
-		w.Poll()
-		v.mul(w, z, z, z)
-		if e.Bit(i) == 1 {
-			v.mul(w, z, z, a)
-		}
-	}
-}
