@@ -136,11 +136,9 @@ func (b *binary) addScaled(w *algebra.Work, z, x, c []uint64) {
 }
 
 func (b *binary) inv(w *algebra.Work, z, x []uint64) bool {
-	f, ok := poly.InvMod(w, packed{}, b.toPoly(x), b.mod.m)
-	if ok {
-		copy(z, f.W)
-		clear(z[len(f.W):])
-	}
+	m := w.Mark()
+	ok := gf2x.Inverse(z, x[:b.u], b.mod.m.W, b.n, w.Dirty(gf2x.InverseScratch(len(b.mod.m.W))))
+	w.Release(m)
 	return ok
 }
 

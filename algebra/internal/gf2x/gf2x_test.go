@@ -119,6 +119,52 @@ func TestDivRem(t *testing.T) {
 	}
 }
 
+func TestInverse(t *testing.T) {
+	r := rand.New(rand.NewPCG(13, 14))
+	found := [2]int{}
+	for d := 1; d <= 64*4; d++ {
+		for range 6 {
+			m := random(r, d/64+1)
+			m[d/64] = m[d/64]&(1<<(d%64)-1) | 1<<(d%64)
+			a := random(r, Words(d))
+			if s := d % 64; s > 0 {
+				a[len(a)-1] &= 1<<s - 1
+			}
+			z := append(random(r, Words(d)), guard)
+			scratch := append(random(r, InverseScratch(len(m))), guard)
+			ok := Inverse(z[:Words(d)], a, m, d, scratch[:len(scratch)-1])
+			if z[Words(d)] != guard || scratch[len(scratch)-1] != guard {
+				t.Fatal("the inverse writes beyond its result")
+			}
+			p := mulSlow(z[:Words(d)], a)
+			if ok {
+				found[1]++
+				if Degree(p) >= d {
+					DivRem(nil, p, m, d)
+				}
+				if Degree(p) != 0 {
+					t.Fatalf("%x is not the inverse of %x modulo %x", z, a, m)
+				}
+				continue
+			}
+			found[0]++
+			// Euclid by remainders finds a common factor.
+			x, y := slices.Clone(m), slices.Clone(a)
+			for Degree(y) >= 0 {
+				e := Degree(y)
+				DivRem(nil, x, y[:e/64+1], e)
+				x, y = y, x
+			}
+			if Degree(x) < 1 {
+				t.Fatalf("%x has an inverse modulo %x", a, m)
+			}
+		}
+	}
+	if found[0] < 100 || found[1] < 100 {
+		t.Fatalf("one side of the test was hardly met: %v", found)
+	}
+}
+
 func TestShift(t *testing.T) {
 	r := rand.New(rand.NewPCG(9, 10))
 	for range 3000 {
