@@ -89,6 +89,11 @@ func TestInterrupt(t *testing.T) {
 		"number of [n for n in 1..1000000, m in 1..1000000 where n*m = 7]",
 		"sum of [n^2 for n in 1..1000000, m in 1..1000000 where n < 0]",
 		"let n = 3^(2*10^7)\n[(n + k)*(n - k) for k in 1..1000]",
+		"factorization of (random polynomial of degree 3000 over F_{2^61})",
+		"order of g_{2^509}",
+		"normal basis of F_{2^400}/F_2",
+		"lattice of F_{2^1680}/F_2",
+		"(x + 1)^100000",
 	} {
 		s := NewSession(Options{})
 		ctx, cancel := context.WithCancel(context.Background())

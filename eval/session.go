@@ -98,7 +98,7 @@ func (s *Session) Evaluate(ctx context.Context, src string) (display.Bundle, *Er
 
 // grace is how long a stopped computation may take to notice before it is
 // left behind.
-const grace = 50 * time.Millisecond
+const grace = 30 * time.Millisecond
 
 // run lets work run on a goroutine of its own, under the budget.
 func (s *Session) run(ctx context.Context, src string, work func(*cell) error, out Sink, keep bool) *Error {

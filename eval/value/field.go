@@ -70,16 +70,17 @@ func equation(p *Printer, K *field.Field, letter string, n int) string {
 	return left + " = " + sumText(terms(p, rest, letter))
 }
 
-// orderText is F_256, or F_{2^100} for a large field.
+// writtenOut says whether the order of a field is written as a number, as in
+// F_256, and not as a power, as in F_{2^12}.
+func writtenOut(K *field.Field) bool {
+	return K.AbsoluteDegree() == 1 || K.Order().Cmp(big.NewInt(1000)) < 0
+}
+
 func orderText(K *field.Field) string {
-	p, n := K.Characteristic(), K.AbsoluteDegree()
-	switch {
-	case K.Order().BitLen() <= 32:
+	if writtenOut(K) {
 		return "F_" + K.Order().String()
-	case n == 1:
-		return "F_" + p.String()
 	}
-	return fmt.Sprintf("F_{%s^%d}", p, n)
+	return fmt.Sprintf("F_{%s^%d}", K.Characteristic(), K.AbsoluteDegree())
 }
 
 // named says whether a name for the generator was chosen.
@@ -132,7 +133,7 @@ func fieldTeX(p *Printer, K *field.Field) string {
 }
 
 func orderTeX(K *field.Field) string {
-	if K.IsPrime() || K.Order().BitLen() <= 20 {
+	if writtenOut(K) {
 		return `\mathbb{F}_{` + K.Order().String() + `}`
 	}
 	return fmt.Sprintf(`\mathbb{F}_{%s^{%d}}`, K.Characteristic(), K.AbsoluteDegree())
@@ -205,7 +206,7 @@ func elementIn(c *Context, v Element, K *field.Field) (algebra.Verdict, error) {
 
 // exponentText is the order of K as an exponent.
 func exponentText(K *field.Field) string {
-	if K.Order().BitLen() <= 32 {
+	if writtenOut(K) {
 		return K.Order().String()
 	}
 	return fmt.Sprintf("(%s^%d)", K.Characteristic(), K.AbsoluteDegree())

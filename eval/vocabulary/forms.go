@@ -144,6 +144,18 @@ var forms = []Entry{
 		}}},
 		Examples: []Example{{"(1/2 as JSON) + 1/2", "1"}},
 	},
+	{
+		Words: "TikZ", Class: Form, Topic: "forms",
+		Meaning: "shows the source that draws a diagram with the TikZ package",
+		Cases: []Case{{Args: []Arg{{Kind: Shown}}, Do: func(c *value.Context, a []value.Value) (value.Value, error) {
+			d, err := diagramOf(c, value.Plain(a[0]))
+			if err != nil {
+				return nil, err
+			}
+			return shown(a[0], "TikZ", display.Text{Text: d.TikZ()}), nil
+		}}},
+		Examples: []Example{{"number of (subfields of F_64 as TikZ)", "4"}},
+	},
 }
 
 func shown(v value.Value, name string, d display.Document) value.Value {
