@@ -99,6 +99,9 @@ func (r *Runner) describe(ctx context.Context, n *Notebook) error {
 		return fmt.Errorf("the kernel does not say what it is: %w", err)
 	}
 	l := info.LanguageInfo
+	if other := n.language(); other != "" && other != l.Name {
+		return fmt.Errorf("the notebook is written in %s, and this kernel runs %s", other, l.Name)
+	}
 	n.Metadata["language_info"] = map[string]any{
 		"name": l.Name, "version": l.Version, "mimetype": l.MIMEType, "file_extension": l.FileExtension,
 	}
@@ -106,4 +109,14 @@ func (r *Runner) describe(ctx context.Context, n *Notebook) error {
 		n.Metadata["kernelspec"] = map[string]any{"name": l.Name, "display_name": "Adjoin", "language": l.Name}
 	}
 	return nil
+}
+
+// language is what the notebook says it is written in, "" when it says nothing.
+func (n *Notebook) language() string {
+	for _, at := range [][2]string{{"kernelspec", "language"}, {"language_info", "name"}} {
+		if s := joined(object(n.Metadata[at[0]])[at[1]]); s != "" {
+			return s
+		}
+	}
+	return ""
 }

@@ -9,7 +9,19 @@ import (
 	"testing"
 
 	"github.com/spf13/cobra"
+
+	"adjoin/kernelspec"
 )
+
+// The test binary is the program itself when it is told so.
+const beProgram = "ADJOIN_TEST_PROGRAM"
+
+func TestMain(m *testing.M) {
+	if os.Getenv(beProgram) != "" {
+		main()
+	}
+	os.Exit(m.Run())
+}
 
 // program runs the program as a shell would.
 func program(t *testing.T, stdin string, args ...string) (code int, stdout, stderr string) {
@@ -149,6 +161,23 @@ func TestRunFailure(t *testing.T) {
 	}
 }
 
+func TestRunRefuses(t *testing.T) {
+	dir := folder(t, map[string]string{
+		"other.ipynb":  `{"cells":[{"cell_type":"code","source":"1"}],"nbformat":4,"metadata":{"kernelspec":{"language":"other","name":"x"}}}`,
+		"broken.ipynb": "{",
+		"text.txt":     "1+1",
+	})
+	for name, want := range map[string]string{"other.ipynb": "other", "broken.ipynb": "not a notebook", "text.txt": "neither", "none.ipynb": "no such file"} {
+		code, _, stderr := program(t, "", "run", filepath.Join(dir, name))
+		if code != 1 || !strings.Contains(stderr, want) {
+			t.Errorf("%s: %d %s", name, code, stderr)
+		}
+	}
+	if left, _ := filepath.Glob(filepath.Join(dir, "*-run.ipynb")); len(left) > 0 {
+		t.Errorf("written all the same: %v", left)
+	}
+}
+
 func TestRunToStandardOutput(t *testing.T) {
 	code, stdout, _ := program(t, "6*7\n", "run", "-q", "--to", "-", "-")
 	if code != 0 || !json.Valid([]byte(stdout)) || !strings.Contains(stdout, `"42"`) {
@@ -213,4 +242,59 @@ func TestEveryCommandHasAnExample(t *testing.T) {
 		}
 	}
 	visit(newRoot())
+}
+
+// The program as a process that Jupyter would start.
+func TestKernelAsAProcess(t *testing.T) {
+	t.Setenv(beProgram, "1")
+	for _, f := range selfTest(os.Args[0]) {
+		if f.Level != fine {
+			t.Errorf("%+v", f)
+		}
+	}
+}
+
+func TestKernelRefuses(t *testing.T) {
+	dir := folder(t, map[string]string{"empty.json": "{}", "list.json": "[]"})
+	for name, want := range map[string]string{"empty.json": "no address", "list.json": "neither", "none.json": "no such file"} {
+		if code, _, stderr := program(t, "", "kernel", "--connection-file", filepath.Join(dir, name)); code != 1 || !strings.Contains(stderr, want) {
+			t.Errorf("%s: %d %s", name, code, stderr)
+		}
+	}
+	if code, _, _ := program(t, "", "kernel"); code != 2 {
+		t.Error("no file is accepted")
+	}
+}
+
+func TestDoctorJudgesKernelspecs(t *testing.T) {
+	prefix := t.TempDir()
+	if code, _, stderr := program(t, "", "install", "--prefix", prefix); code != 0 {
+		t.Fatal(stderr)
+	}
+	dir := filepath.Join(prefix, "share", "jupyter", "kernels", "adjoin")
+	spec, err := kernelspec.Read(dir)
+	if err != nil {
+		t.Fatal(err)
+	}
+	found := func(change func(f *kernelspec.Found)) string {
+		f := kernelspec.Found{Name: "adjoin", Dir: dir, Spec: spec}
+		f.Spec.Argv = append([]string(nil), spec.Argv...)
+		change(&f)
+		return installed(f, os.Args[0]).Level
+	}
+	for name, c := range map[string]struct {
+		change func(f *kernelspec.Found)
+		want   string
+	}{
+		"as installed":    {func(*kernelspec.Found) {}, fine},
+		"program gone":    {func(f *kernelspec.Found) { f.Spec.Argv[0] = filepath.Join(prefix, "gone") }, trouble},
+		"no program":      {func(f *kernelspec.Found) { f.Spec.Argv = nil }, trouble},
+		"hidden":          {func(f *kernelspec.Found) { f.Hidden = true }, note},
+		"another version": {func(f *kernelspec.Found) { f.Spec.Metadata = nil }, note},
+		"another program": {func(f *kernelspec.Found) { f.Spec.Argv[0] = filepath.Join(dir, "kernel.json") }, note},
+	} {
+		if got := found(c.change); got != c.want {
+			t.Errorf("%s: %s", name, got)
+		}
+	}
 }
