@@ -96,7 +96,7 @@ func (b *binary) dot(w *algebra.Work, z, x, y []uint64) {
 	sum, p := w.Words(2*u), w.Dirty(2*u)
 	scratch := w.Dirty(gf2x.Scratch(u, u))
 	for i := 0; i < len(x); i += u {
-		gf2x.Mul(p, x[i:i+u], y[len(y)-u-i:len(y)-i], scratch)
+		gf2x.Mul(p, x[i:i+u], y[len(y)-u-i:len(y)-i], scratch, nil)
 		xorVec(sum, sum, p)
 	}
 	copy(z, b.mod.reduce(sum))
@@ -106,7 +106,7 @@ func (b *binary) dot(w *algebra.Work, z, x, y []uint64) {
 func (b *binary) mul(w *algebra.Work, z, x, y []uint64) {
 	m := w.Mark()
 	p := w.Dirty(2 * b.u)
-	gf2x.Mul(p, x[:b.u], y[:b.u], w.Dirty(gf2x.Scratch(b.u, b.u)))
+	gf2x.Mul(p, x[:b.u], y[:b.u], w.Dirty(gf2x.Scratch(b.u, b.u)), nil)
 	copy(z, b.mod.reduce(p))
 	w.Release(m)
 }

@@ -169,7 +169,7 @@ func (packed) Mul(w *algebra.Work, z, f, g *poly.Poly) {
 func mulBits(w *algebra.Work, a, b []uint64) []uint64 {
 	w.Poll()
 	t := w.Dirty(len(a) + len(b))
-	gf2x.Mul(t, a, b, w.Dirty(gf2x.Scratch(len(a), len(b))))
+	gf2x.Mul(t, a, b, w.Dirty(gf2x.Scratch(len(a), len(b))), w.Poll)
 	return t
 }
 
@@ -194,7 +194,7 @@ func (p packed) DivRem(w *algebra.Work, q, r, f, g *poly.Poly) {
 	if q != nil {
 		quo = w.Words(gf2x.Words(max(0, f.N-g.N+1)))
 	}
-	gf2x.DivRem(quo, t, g.W, g.Degree())
+	gf2x.DivRemBy(quo, t, g.W, g.Degree(), gf2x.TopInverse(g.W, g.Degree()), w.Poll)
 	if q != nil {
 		copyBits(q, quo)
 	}
@@ -220,15 +220,34 @@ func (packed) Derivative(z, f *poly.Poly) {
 
 func (packed) FrobeniusCoeffs(w *algebra.Work, z, f *poly.Poly, k int) { copyBits(z, f.W) }
 
+// References:
+//
+//	[Barrett] P. Barrett, Implementing the RSA public key encryption algorithm on
+//	  a standard digital signal processor, 1986: the quotient by two products.
+//	  For polynomials it is exact.
+
 // packedModulus reduces by folding, when its terms below the leading one are
-// few and far below it, and by long division otherwise.
+// few and far below it, as in [Barrett] when it is long, and by long division
+// otherwise.
 type packedModulus struct {
 	m       *poly.Poly
 	inverse uint64
-	terms   []int // exponents below the leading one, or nil
+	terms   []int      // exponents below the leading one, or nil
+	barrett *poly.Poly // quotient of x^(2n) by m of degree n, or nil
 }
 
-func (packed) NewModulus(w *algebra.Work, m *poly.Poly) poly.Modulus { return newPackedModulus(m) }
+func (p packed) NewModulus(w *algebra.Work, m *poly.Poly) poly.Modulus {
+	z := newPackedModulus(m)
+	if n := m.Degree(); z.terms == nil && n >= PackedNewton {
+		z.barrett = new(poly.Poly)
+		poly.DivRemBySeries(w, p, z.barrett, nil, poly.Monomial(p, bitOne, 2*n), m)
+	}
+	return z
+}
+
+// PackedNewton is the degree from which reduction by a fixed modulus goes
+// through its inverse.
+var PackedNewton = 6000
 
 func newPackedModulus(m *poly.Poly) *packedModulus {
 	z := &packedModulus{m: &poly.Poly{W: append([]uint64(nil), m.W...), N: m.N}}
@@ -253,7 +272,7 @@ func (m *packedModulus) Poly() *poly.Poly { return m.m }
 func (m *packedModulus) reduce(t []uint64) []uint64 {
 	n := m.m.Degree()
 	if m.terms == nil {
-		gf2x.DivRemBy(nil, t, m.m.W, n, m.inverse)
+		gf2x.DivRemBy(nil, t, m.m.W, n, m.inverse, nil)
 	} else {
 		for j := len(t) - 1; 64*j >= n; j-- {
 			x := t[j]
@@ -283,11 +302,36 @@ func (*packedModulus) fold(t []uint64, x uint64, k int) {
 	}
 }
 
+// reduceLong is reduce that may take long.
+func (m *packedModulus) reduceLong(w *algebra.Work, t []uint64) []uint64 {
+	n := m.m.Degree()
+	d := gf2x.Degree(t)
+	if m.terms != nil || d < n {
+		return m.reduce(t)
+	}
+	if m.barrett == nil || d > 2*n {
+		gf2x.DivRemBy(nil, t, m.m.W, n, m.inverse, w.Poll)
+		return t[:gf2x.Words(n)]
+	}
+	mark := w.Mark()
+	high := w.Dirty(gf2x.Words(d + 1 - n))
+	gf2x.Shr(high, t, n)
+	p := mulBits(w, high, m.barrett.W)
+	gf2x.Shr(high, p, n)
+	t = t[:gf2x.Words(n)]
+	xorVec(t, t, mulBits(w, high, m.m.W))
+	if s := n % 64; s > 0 {
+		t[len(t)-1] &= 1<<s - 1
+	}
+	w.Release(mark)
+	return t
+}
+
 func (m *packedModulus) Reduce(w *algebra.Work, z, f *poly.Poly) {
 	mark := w.Mark()
 	t := w.Dirty(len(f.W))
 	copy(t, f.W)
-	copyBits(z, m.reduce(t))
+	copyBits(z, m.reduceLong(w, t))
 	w.Release(mark)
 }
 
@@ -297,7 +341,7 @@ func (m *packedModulus) MulMod(w *algebra.Work, z, f, g *poly.Poly) {
 		return
 	}
 	mark := w.Mark()
-	copyBits(z, m.reduce(mulBits(w, f.W, g.W)))
+	copyBits(z, m.reduceLong(w, mulBits(w, f.W, g.W)))
 	w.Release(mark)
 }
 
@@ -306,6 +350,6 @@ func (m *packedModulus) SqrMod(w *algebra.Work, z, f *poly.Poly) {
 	mark := w.Mark()
 	t := w.Dirty(2 * len(f.W))
 	gf2x.Sqr(t, f.W)
-	copyBits(z, m.reduce(t))
+	copyBits(z, m.reduceLong(w, t))
 	w.Release(mark)
 }

@@ -79,13 +79,13 @@ func TestArith(t *testing.T) {
 func TestCrossovers(t *testing.T) {
 	for _, c := range []*int{
 		&rep.WordSplit, &rep.LongSplit, &rep.BinarySplit, &rep.TableSplit,
-		&rep.ZechSplit, &rep.ZechNewton, &rep.WordNewton, &rep.LongNewton, &rep.BinaryNewton, &rep.TableNewton, &rep.TowerNewton,
+		&rep.PackedNewton, &rep.PackedDivisionThreshold, &rep.ZechSplit, &rep.ZechNewton, &rep.WordNewton, &rep.LongNewton, &rep.BinaryNewton, &rep.TableNewton, &rep.TowerNewton,
 	} {
 		defer func(old int) { *c = old }(*c)
 		*c = 2
 	}
 	list := fields()
-	for _, name := range []string{"F_3", "F_p 63 bits", "F_p 127 bits", "F_256", "F_2^127", "F_3^5", "F_3^5 generic", "((F_4)^3)^2", "generic tower"} {
+	for _, name := range []string{"F_2", "F_3", "F_p 63 bits", "F_p 127 bits", "F_256", "F_2^127", "F_3^5", "F_3^5 generic", "((F_4)^3)^2", "generic tower"} {
 		A := list[name]
 		t.Run(name, func(t *testing.T) { algtest.Arith(t, A, 2) })
 	}

@@ -23,7 +23,7 @@ func Words(n int) int { return (n + 63) / 64 }
 // the product of the power series r and 1/g, and 64 terms of it need only the
 // 64 highest terms of both.
 func DivRem(q, r, g []uint64, d int) {
-	DivRemBy(q, r, g, d, TopInverse(g, d))
+	DivRemBy(q, r, g, d, TopInverse(g, d), nil)
 }
 
 // TopInverse is 1/g as a power series in 1/x to 64 terms, term i in bit i.
@@ -36,9 +36,15 @@ func TopInverse(g []uint64, d int) uint64 {
 	return inv
 }
 
-// DivRemBy is DivRem with the TopInverse of g at hand.
-func DivRemBy(q, r, g []uint64, d int, inverse uint64) {
+// DivRemBy is DivRem with the TopInverse of g at hand. Long divisions call
+// poll, which may be nil, every millisecond or so.
+func DivRemBy(q, r, g []uint64, d int, inverse uint64, poll func()) {
+	work := 0
 	for n := Degree(r); n >= d; n = Degree(r[:n/64+1]) {
+		if work += len(g); work > 1<<16 && poll != nil {
+			poll()
+			work = 0
+		}
 		// As many terms as leave a whole number of words below them.
 		k := (n-d)%64 + 1
 		t := bits.Reverse64(low(bits.Reverse64(topWord(r, n)), inverse)) >> (64 - k)

@@ -49,7 +49,7 @@ func TestMul(t *testing.T) {
 				z[m+n] = guard
 				scratch := make([]uint64, Scratch(m, n)+1)
 				scratch[len(scratch)-1] = guard
-				Mul(z[:m+n], a, b, scratch[:len(scratch)-1])
+				Mul(z[:m+n], a, b, scratch[:len(scratch)-1], func() {})
 				if !slices.Equal(z[:m+n], mulSlow(a, b)) {
 					t.Fatalf("threshold %d: product of %d and %d words is wrong", threshold, m, n)
 				}
@@ -190,7 +190,7 @@ func BenchmarkMul(b *testing.B) {
 		x, y, z, s := random(r, n), random(r, n), make([]uint64, 2*n), make([]uint64, Scratch(n, n))
 		b.Run(fmt.Sprintf("words=%d", n), func(b *testing.B) {
 			for range b.N {
-				Mul(z, x, y, s)
+				Mul(z, x, y, s, nil)
 			}
 		})
 	}

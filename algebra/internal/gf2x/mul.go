@@ -78,8 +78,8 @@ var KaratsubaThreshold = 12
 
 // Mul sets z to a b. len(z) == len(a)+len(b), both operands have at least one
 // word, and z overlaps neither. scratch has at least Scratch(len(a), len(b))
-// words.
-func Mul(z, a, b, scratch []uint64) {
+// words. Long products call poll, which may be nil, every millisecond or so.
+func Mul(z, a, b, scratch []uint64, poll func()) {
 	if len(a) < len(b) {
 		a, b = b, a
 	}
@@ -97,11 +97,11 @@ func Mul(z, a, b, scratch []uint64) {
 		for i := 0; i < len(a); i += n {
 			piece := a[i:min(i+n, len(a))]
 			p := t[:len(piece)+n]
-			Mul(p, piece, b, scratch[2*n:])
+			Mul(p, piece, b, scratch[2*n:], poll)
 			xor(z[i:i+len(p)], p)
 		}
 	default:
-		karatsuba(z, a, b, scratch)
+		karatsuba(z, a, b, scratch, poll)
 	}
 }
 
@@ -111,7 +111,10 @@ func Scratch(m, n int) int { return 8*max(m, n) + 256 }
 
 // karatsuba splits both operands at half of the longer one, h words:
 // a b = a1 b1 X^2 + ((a0+a1)(b0+b1) + a0 b0 + a1 b1) X + a0 b0 with X = x^(64h).
-func karatsuba(z, a, b, scratch []uint64) {
+func karatsuba(z, a, b, scratch []uint64, poll func()) {
+	if poll != nil && len(a) > 256 {
+		poll()
+	}
 	h := (len(a) + 1) / 2
 	a0, a1, b0, b1 := a[:h], a[h:], b[:h], b[h:]
 	s, t, m, rest := scratch[:h], scratch[h:2*h], scratch[2*h:4*h], scratch[4*h:]
@@ -119,9 +122,9 @@ func karatsuba(z, a, b, scratch []uint64) {
 	xor(s, a1)
 	copy(t, b0)
 	xor(t, b1)
-	Mul(m, s, t, rest)
-	Mul(z[:2*h], a0, b0, rest)
-	Mul(z[2*h:], a1, b1, rest)
+	Mul(m, s, t, rest, poll)
+	Mul(z[:2*h], a0, b0, rest, poll)
+	Mul(z[2*h:], a1, b1, rest, poll)
 	xor(m, z[:2*h])
 	xor(m, z[2*h:])
 	xor(z[h:], m[:min(len(m), len(z)-h)])
