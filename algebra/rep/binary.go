@@ -62,8 +62,8 @@ func xorVec(z, x, y []uint64) {
 	}
 }
 
-func (b *binary) split() int  { return BinarySplit }
-func (b *binary) newton() int { return BinaryNewton }
+func (b *binary) split(n int) bool { return n >= BinarySplit }
+func (b *binary) newton() int      { return BinaryNewton }
 
 // Crossovers for F_{2^n} as for word primes.
 var (

@@ -117,8 +117,8 @@ func (t *tower) neg(z, a []uint64)    { t.v.neg(z, a) }
 // Products of polynomials go by Kronecker's substitution: coefficients are
 // laid 2n-1 elements of the base apart, so that one product over the base
 // holds all of them. Karatsuba's method then works inside that product.
-func (t *tower) split() int  { return 1 << 62 }
-func (t *tower) newton() int { return TowerNewton }
+func (t *tower) split(int) bool { return false }
+func (t *tower) newton() int    { return TowerNewton }
 
 // TowerNewton is for towers what WordNewton is for word primes.
 var TowerNewton = 4

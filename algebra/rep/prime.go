@@ -31,17 +31,28 @@ func (f *wordPrime) order() *big.Int          { return f.p }
 func (f *wordPrime) degree() int              { return 1 }
 func (f *wordPrime) width() int               { return 1 }
 func (f *wordPrime) one() []uint64            { return bitOne }
-func (f *wordPrime) split() int               { return WordSplit }
-func (f *wordPrime) newton() int              { return WordNewton }
+
+// split leaves what Kronecker's substitution does well to convolve.
+func (f *wordPrime) split(n int) bool { return n >= WordSplit && !f.kronecker(n) }
+
+func (f *wordPrime) kronecker(n int) bool {
+	return f.p.BitLen() <= WordKroneckerBits && WordKronecker <= n && n < 1<<14
+}
+
+func (f *wordPrime) newton() int { return WordNewton }
 
 // Crossovers, in coefficients: Split is where products are split in two,
 // Newton where division by a fixed modulus goes through its inverse power
 // series. Word is for word primes, Long for longer ones.
 var (
-	WordSplit  = 48
-	WordNewton = 48
-	LongSplit  = 16
-	LongNewton = 16
+	WordSplit = 48
+	// Kronecker's substitution takes over from WordKronecker for primes of up to
+	// WordKroneckerBits bits.
+	WordKronecker     = 32
+	WordKroneckerBits = 40
+	WordNewton        = 48
+	LongSplit         = 16
+	LongNewton        = 16
 )
 
 func (f *wordPrime) add(z, a, b []uint64) { f.m.AddVec(z, a, b) }
@@ -50,14 +61,28 @@ func (f *wordPrime) neg(z, a []uint64)    { f.m.NegVec(z, a) }
 
 func (f *wordPrime) scale(_ *algebra.Work, z, a, c []uint64)     { f.m.ScaleVec(z, a, c[0]) }
 func (f *wordPrime) addScaled(_ *algebra.Work, z, a, c []uint64) { f.m.AddScaledVec(z, a, c[0]) }
-func (f *wordPrime) convolve(_ *algebra.Work, z, a, b []uint64)  { f.m.Convolve(z, a, b) }
-func (f *wordPrime) square(_ *algebra.Work, z, a []uint64)       { f.m.Square(z, a) }
 func (f *wordPrime) dot(_ *algebra.Work, z, a, b []uint64)       { z[0] = f.m.Dot(a, b) }
 func (f *wordPrime) mul(_ *algebra.Work, z, a, b []uint64)       { z[0] = f.m.Mul(a[0], b[0]) }
 
 func (f *wordPrime) inv(_ *algebra.Work, z, a []uint64) bool {
 	z[0] = f.m.Inv(a[0])
 	return true
+}
+
+func (f *wordPrime) convolve(_ *algebra.Work, z, a, b []uint64) {
+	if f.kronecker(min(len(a), len(b))) {
+		f.m.Kronecker(z, a, b)
+	} else {
+		f.m.Convolve(z, a, b)
+	}
+}
+
+func (f *wordPrime) square(_ *algebra.Work, z, a []uint64) {
+	if f.kronecker(len(a)) {
+		f.m.Kronecker(z, a, a)
+	} else {
+		f.m.Square(z, a)
+	}
 }
 
 func (f *wordPrime) frobenius(_ *algebra.Work, z, a []uint64, _ int) { z[0] = a[0] }
@@ -83,7 +108,7 @@ func (f *longPrime) order() *big.Int          { return f.p }
 func (f *longPrime) degree() int              { return 1 }
 func (f *longPrime) width() int               { return f.m.K }
 func (f *longPrime) one() []uint64            { return f.m.One() }
-func (f *longPrime) split() int               { return LongSplit }
+func (f *longPrime) split(n int) bool         { return n >= LongSplit }
 func (f *longPrime) newton() int              { return LongNewton }
 
 func (f *longPrime) add(z, a, b []uint64) { f.m.AddVec(z, a, b) }

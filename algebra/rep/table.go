@@ -63,8 +63,8 @@ func (t *table) slowMul(x, y uint64) uint64 {
 	return z
 }
 
-func (t *table) split() int  { return TableSplit }
-func (t *table) newton() int { return TableNewton }
+func (t *table) split(n int) bool { return n >= TableSplit }
+func (t *table) newton() int      { return TableNewton }
 
 // Crossovers for table fields as for word primes.
 var (

@@ -24,7 +24,7 @@ type vectors interface {
 	scale(w *algebra.Work, z, a, c []uint64)
 	addScaled(w *algebra.Work, z, a, c []uint64)
 	// convolve sets z to the product of the polynomials a and b, neither
-	// empty, by the method for short ones: len(z) == len(a)+len(b)-width, and
+	// empty, by a method of its own: len(z) == len(a)+len(b)-width, and
 	// z overlaps neither.
 	convolve(w *algebra.Work, z, a, b []uint64)
 	// square is convolve of a with itself.
@@ -32,9 +32,9 @@ type vectors interface {
 	// dot sets z to the sum of a[i] b[n-1-i] for vectors of n >= 1 elements, one
 	// coefficient of a convolution. z overlaps neither.
 	dot(w *algebra.Work, z, a, b []uint64)
-	// split is the number of coefficients from which Karatsuba's method beats
-	// convolve.
-	split() int
+	// split says whether Karatsuba's method beats convolve for n coefficients,
+	// or is wanted so that the computation polls.
+	split(n int) bool
 	// newton is the number of coefficients from which division through the
 	// inverse power series beats long division, when the series is at hand.
 	newton() int
@@ -59,7 +59,7 @@ func product(w *algebra.Work, v vectors, z, a, b []uint64) {
 	}
 	u := v.width()
 	na, nb := len(a)/u, len(b)/u
-	if nb < v.split() || nb < 2 {
+	if nb < 2 || !v.split(nb) {
 		v.convolve(w, z, a, b)
 		return
 	}
@@ -98,7 +98,7 @@ func product(w *algebra.Work, v vectors, z, a, b []uint64) {
 // square is product of a with itself.
 func square(w *algebra.Work, v vectors, z, a []uint64) {
 	u := v.width()
-	if n := len(a) / u; n < v.split() || n < 2 {
+	if n := len(a) / u; n < 2 || !v.split(n) {
 		v.square(w, z, a)
 		return
 	}

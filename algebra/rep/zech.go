@@ -86,8 +86,8 @@ func (z *zech) degree() int              { return z.t.degree() }
 func (z *zech) width() int               { return 1 }
 func (z *zech) one() []uint64            { return bitOne }
 
-func (z *zech) split() int  { return ZechSplit }
-func (z *zech) newton() int { return ZechNewton }
+func (z *zech) split(n int) bool { return n >= ZechSplit }
+func (z *zech) newton() int      { return ZechNewton }
 
 // Crossovers for fields with Zech's logarithms as for word primes.
 var (

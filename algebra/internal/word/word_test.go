@@ -104,6 +104,44 @@ func TestConvolve(t *testing.T) {
 	}
 }
 
+func TestKronecker(t *testing.T) {
+	r := rand.New(rand.NewPCG(5, 5))
+	for _, p := range primes {
+		m := New(p)
+		for k := 1; k <= 130; k += 1 + k/20 {
+			for _, l := range []int{1, 2, k, k/2 + 1} {
+				a, b := residues(r, k, p), residues(r, l, p)
+				if l == k {
+					for i := range a { // the greatest sums
+						a[i], b[i] = p-1, p-1
+					}
+				}
+				z, want := make([]uint64, k+l), make([]uint64, k+l-1)
+				z[k+l-1] = 77
+				m.Kronecker(z[:k+l-1], a, b)
+				m.Convolve(want, a, b)
+				for i := range want {
+					if z[i] != want[i] {
+						t.Fatalf("product of lengths %d and %d modulo %d is wrong at %d", k, l, p, i)
+					}
+				}
+				if z[k+l-1] != 77 {
+					t.Fatal("the product writes beyond its result")
+				}
+			}
+		}
+		a := residues(r, 50, p)
+		z, want := make([]uint64, 99), make([]uint64, 99)
+		m.Kronecker(z, a, a)
+		m.Convolve(want, a, a)
+		for i := range want {
+			if z[i] != want[i] {
+				t.Fatalf("square modulo %d is wrong at %d", p, i)
+			}
+		}
+	}
+}
+
 func TestSquare(t *testing.T) {
 	r := rand.New(rand.NewPCG(4, 4))
 	for _, p := range primes {
