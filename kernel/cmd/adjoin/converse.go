@@ -27,7 +27,9 @@ func converse(s *eval.Session, out *printer) error {
 	history := kernel.NewHistory(kernel.DefaultHistory())
 	lines := &pastLines{}
 	for _, input := range history.Inputs() {
-		lines.Add(strings.ReplaceAll(input, "\n", "; "))
+		if !strings.Contains(input, "\n") {
+			lines.keep(input)
+		}
 	}
 	for count := 1; ; {
 		text, err := readStatement(s, lines)
@@ -42,6 +44,7 @@ func converse(s *eval.Session, out *printer) error {
 		if err := out.evaluate(s, text); err != nil && !errors.Is(err, failed{}) {
 			fmt.Fprintln(out.err, err)
 		}
+		lines.keep(strings.ReplaceAll(text, "\n", " "))
 		history.Add(count, text, "")
 		history.Flush()
 		count++
@@ -61,7 +64,7 @@ func readStatement(s *eval.Session, lines *pastLines) (string, error) {
 		io.Writer
 	}{os.Stdin, os.Stdout}, prompt)
 	t.History = lines
-	if w, h, err := term.GetSize(fd); err == nil {
+	if w, h, err := term.GetSize(fd); err == nil && w > 0 {
 		_ = t.SetSize(w, h)
 	}
 	text := ""
@@ -120,15 +123,18 @@ func commonPrefix(a, b string) string {
 	return a[:n]
 }
 
-// pastLines are the lines that the arrow keys recall.
+// pastLines are the statements that the arrow keys recall, each on one line.
 type pastLines struct{ lines []string }
 
-// Add implements term.History.
-func (p *pastLines) Add(line string) {
+func (p *pastLines) keep(line string) {
 	if strings.TrimSpace(line) != "" && (len(p.lines) == 0 || p.lines[len(p.lines)-1] != line) {
 		p.lines = append(p.lines, line)
 	}
 }
+
+// Add implements term.History, which offers each line; a statement of several
+// lines is kept as one.
+func (p *pastLines) Add(string) {}
 
 // Len implements term.History.
 func (p *pastLines) Len() int { return len(p.lines) }
