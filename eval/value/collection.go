@@ -61,6 +61,7 @@ type Lazy struct {
 	Count   *big.Int // nil for infinitely many
 	Members func(c *Context) iter.Seq2[Value, error]
 	Has     func(c *Context, v Value) (algebra.Verdict, error) // nil: search
+	Quick   bool                                               // listing costs little, so that the first members are shown
 }
 
 func (List) Kind() string  { return "a list" }
@@ -292,9 +293,36 @@ func (r Range) Canonical() (string, map[string]any) {
 func machineItems(items []Value) map[string]any {
 	m := make([]any, len(items))
 	for i, v := range items {
-		m[i] = Machine(v)
+		m[i] = machinePart(v)
 	}
 	return map[string]any{"items": m}
+}
+
+// most members of a quick collection that are shown beside its text.
+const firstMembers = 16
+
+// Document shows the first members of a quick collection.
+func (l Lazy) Document(p *Printer) display.Document {
+	if !l.Quick || l.Count == nil || l.Count.Sign() == 0 {
+		return display.Text{Text: l.Text(p)}
+	}
+	s := display.Sequence{Open: "[", Close: "]"}
+	for v, err := range l.Members(&Context{W: algebra.NewWork(nil), Limits: DefaultLimits}) {
+		if err != nil {
+			break
+		}
+		if s.Items = append(s.Items, cell(p, v)); len(s.Items) == firstMembers {
+			break
+		}
+	}
+	switch {
+	case l.Count.IsInt64():
+		s.Total = int(l.Count.Int64())
+	default: // more than a reader wants to see counted
+		s.Items = append(s.Items, display.Cell{Text: "...", TeX: `\dots`})
+		s.Total = len(s.Items)
+	}
+	return s
 }
 
 // Document is a table when the list has notes.

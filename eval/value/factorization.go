@@ -76,11 +76,11 @@ func (f Factorization) written(text func(Value) string, open, end, times string,
 func (f Factorization) Canonical() (string, map[string]any) {
 	var list []any
 	for _, g := range f.Factors {
-		list = append(list, map[string]any{"factor": Machine(g.F), "multiplicity": g.E})
+		list = append(list, map[string]any{"factor": machinePart(g.F), "multiplicity": g.E})
 	}
-	m := map[string]any{"of": Machine(f.Of), "factors": list}
+	m := map[string]any{"of": machinePart(f.Of), "factors": list}
 	if f.Unit != nil {
-		m["unit"] = Machine(f.Unit)
+		m["unit"] = machinePart(f.Unit)
 	}
 	return "factorization", m
 }

@@ -227,7 +227,8 @@ func Elements(f Field) Lazy {
 				}
 			}
 		},
-		Has: f.Contains,
+		Has:   f.Contains,
+		Quick: true,
 	}
 }
 

@@ -41,7 +41,11 @@ func LetterTeX(name string) string {
 		head = `\mathrm{` + head + `}`
 	}
 	if index != "" {
-		head += "_{" + strings.Trim(strings.ReplaceAll(index, "_", `\_`), "{}") + "}"
+		index = strings.Trim(strings.ReplaceAll(index, "_", `\_`), "{}")
+		if base, exponent, ok := strings.Cut(index, "^"); ok {
+			index = base + "^{" + exponent + "}"
+		}
+		head += "_{" + index + "}"
 	}
 	return head + primes
 }

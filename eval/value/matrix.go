@@ -73,7 +73,7 @@ func (m Matrix) Canonical() (string, map[string]any) {
 	for i, r := range m.Rows {
 		row := make([]any, len(r))
 		for j, v := range r {
-			row[j] = Machine(v)
+			row[j] = machinePart(v)
 		}
 		rows[i] = row
 	}

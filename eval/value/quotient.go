@@ -48,7 +48,7 @@ func (u Quotient) TeX(p *Printer) string {
 
 func (u Quotient) Canonical() (string, map[string]any) {
 	return "rational function", map[string]any{
-		"over": "Q", "letter": u.Letter, "numerator": Machine(Polynomial{u.Num, u.Letter}), "denominator": Machine(Polynomial{u.Den, u.Letter}),
+		"over": "Q", "letter": u.Letter, "numerator": machinePart(Polynomial{u.Num, u.Letter}), "denominator": machinePart(Polynomial{u.Den, u.Letter}),
 	}
 }
 

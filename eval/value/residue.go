@@ -10,9 +10,12 @@ import (
 // Residue is an element of Z/M, with 0 <= N < M.
 type Residue struct{ N, M *big.Int }
 
-func (a Residue) Kind() string         { return "a residue modulo " + Short(a.M) }
-func (a Residue) Text(*Printer) string { return a.N.String() + " over Z/" + a.M.String() }
-func (a Residue) TeX(*Printer) string  { return a.N.String() }
+func (a Residue) Kind() string           { return "a residue modulo " + Short(a.M) }
+func (a Residue) Text(p *Printer) string { return withRing(p, a) }
+
+func (a Residue) overText(*Printer) (bare, ring string) { return a.N.String(), "Z/" + a.M.String() }
+
+func (a Residue) TeX(*Printer) string { return a.N.String() }
 func (a Residue) Canonical() (string, map[string]any) {
 	return "residue", map[string]any{"value": a.N.String(), "modulus": a.M.String()}
 }
@@ -106,6 +109,7 @@ func Residues(R Ring) Lazy {
 				}
 			}
 		},
-		Has: R.Contains,
+		Has:   R.Contains,
+		Quick: true,
 	}
 }

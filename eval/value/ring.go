@@ -93,7 +93,7 @@ func (r Ring) Canonical() (string, map[string]any) {
 }
 
 func (r PolynomialRing) Canonical() (string, map[string]any) {
-	return "polynomial ring", map[string]any{"over": Machine(r.Over), "letter": r.Letter}
+	return "polynomial ring", map[string]any{"over": machinePart(r.Over), "letter": r.Letter}
 }
 
 func (f FunctionField) Canonical() (string, map[string]any) {

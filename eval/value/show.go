@@ -35,10 +35,9 @@ func Bundle(v Value, p *Printer, limit int) display.Bundle {
 	if b.Data == nil {
 		b.Data = map[string]any{}
 	}
-	if m := Machine(Plain(v)); m != nil {
-		if text, err := json.Marshal(m); err == nil && len(text) <= limit {
-			b.Data[MachineType] = m
-		}
+	m := Machine(v)
+	if text, err := json.Marshal(m); err == nil && len(text) <= limit {
+		b.Data[MachineType] = m
 	}
 	return b
 }
@@ -113,15 +112,22 @@ var texEscapes = strings.NewReplacer(`\`, `\textbackslash `, "{", `\{`, "}", `\}
 func escapeTeX(s string) string { return texEscapes.Replace(s) }
 
 // Machine is the machine form of a value: an object with the version of the
-// form, the kind, and what belongs to the kind. It is nil for a value that has
-// none.
+// form, the kind, and what belongs to the kind.
 func Machine(v Value) map[string]any {
+	m := machinePart(v)
+	m["v"] = 1
+	return m
+}
+
+// machinePart is the machine form of a value inside a larger one. A value that
+// is not Canonical has its text.
+func machinePart(v Value) map[string]any {
 	c, ok := Plain(v).(Canonical)
 	if !ok {
-		return map[string]any{"v": 1, "kind": "text form", "text": Plain(v).Text(nil)}
+		return map[string]any{"kind": "expression", "text": Plain(v).Text(nil)}
 	}
 	kind, fields := c.Canonical()
-	m := map[string]any{"v": 1, "kind": kind}
+	m := map[string]any{"kind": kind}
 	for k, x := range fields {
 		m[k] = x
 	}
