@@ -71,22 +71,41 @@ func Standardize(w *algebra.Work, K *Field) (m *Map, err error) {
 	}
 	if Same(K, S) {
 		m = inclusion(w, K, S)
-	} else {
-		base, err := Embed(w, K.base, S)
-		if err != nil {
-			return nil, err
-		}
-		f := K.Modulus().Map(w, base)
-		root := leastRoot(w, f, K.base.absolute)
-		if K.base.base == nil {
-			base = nil
-		}
-		m = newMap(K, S, root, base)
+	} else if m, err = standardize(w, K, S); err != nil {
+		return nil, err
 	}
 	K.mu.Lock()
 	defer K.mu.Unlock()
 	K.fixed = m
 	return m, nil
+}
+
+// standardize finds the map that Standardize describes from any isomorphism
+// and the conjugates of the image of the generator.
+func standardize(w *algebra.Work, K, S *Field) (*Map, error) {
+	m, err := someIsomorphism(w, S, K).Inverse(w)
+	if err != nil {
+		return nil, err
+	}
+	if m.base != nil {
+		base, err := Embed(w, K.base, S)
+		if err != nil {
+			return nil, err
+		}
+		f := frobenius(w, S, 1)
+		for !m.base.Equal(w, base) {
+			w.Poll()
+			m = m.Then(w, f)
+		}
+	}
+	least := m.image
+	for i, a := 1, m.image; i < K.n; i++ {
+		w.Poll()
+		if a = a.Frobenius(w, K.base.absolute); Compare(a, least) < 0 {
+			least = a
+		}
+	}
+	return newMap(K, S, least, m.base), nil
 }
 
 // Embeddings lists all homomorphisms from K to L, as many as the absolute

@@ -289,6 +289,11 @@ func Frobenius(w *algebra.Work, L, K *Field) *Map {
 	return frobenius(w, L, K.absolute%L.absolute)
 }
 
+// FrobeniusPower is x -> x^(p^k) on L, for any integer k.
+func FrobeniusPower(w *algebra.Work, L *Field, k int) *Map {
+	return frobenius(w, L, (k%L.absolute+L.absolute)%L.absolute)
+}
+
 func gcd(a, b int) int {
 	for b != 0 {
 		a, b = b, a%b

@@ -2,20 +2,33 @@ package field
 
 import (
 	"adjoin/algebra"
+	"adjoin/algebra/integer"
 	"adjoin/algebra/poly"
 )
 
-// leastRoot is the root of f with the least code. f is irreducible over the
-// subfield with p^d elements and splits where its coefficients lie, so that
-// its roots are the conjugates of any one of them.
-func leastRoot(w *algebra.Work, f Polynomial, d int) Elem {
-	g := Elem{f.k, poly.Root1(w, f.k.arith, f.f)}
-	least := g
-	for range f.Degree() - 1 {
-		w.Poll()
-		if g = g.Frobenius(w, d); Compare(g, least) < 0 {
-			least = g
+// someIsomorphism is an isomorphism from the standard field S to a field K of
+// the same order. Which one depends on K.
+//
+// No polynomial of the degree of K is split on the way: the generators of the
+// subfields of prime power degree are found by steps of prime degree, each a
+// root of a polynomial over the field of the step before, and g_n is put
+// together from them as the rule of standard.go says.
+func someIsomorphism(w *algebra.Work, S, K *Field) *Map {
+	F := S.prime
+	var images []Elem
+	for _, q := range integer.FactorInt(S.absolute) {
+		below := newMap(F, K, K.One(), nil)
+		below.included = true
+		for e := 1; e <= q.E; e++ {
+			part := standardField(w, F, power(q.P, e))
+			f, _ := part.Generator().MinimalPolynomial(w, below.from)
+			r := poly.Root1(w, K.arith, f.Map(w, below).f)
+			if r == nil {
+				algebra.Fail(errSubfield)
+			}
+			below = newMap(part, K, Elem{K, r}, nil)
 		}
+		images = append(images, below.image)
 	}
-	return least
+	return newMap(S, K, assemble(w, F, S.absolute, K, images), nil)
 }

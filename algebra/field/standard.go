@@ -433,10 +433,17 @@ func combineParts(w *algebra.Work, F *Field, m, n int) Elem {
 			images[i] = newMap(part, L, up[j], nil).Apply(w, standardImage(w, F, power(q.P, q.E), part.absolute))
 		}
 	}
-	if len(fm) == 1 {
+	return assemble(w, F, m, L, images)
+}
+
+// assemble is the image of g_m under the homomorphism into L that sends the
+// parts of g_m to the given images.
+func assemble(w *algebra.Work, F *Field, m int, L *Field, images []Elem) Elem {
+	f := integer.FactorInt(m)
+	switch {
+	case len(f) == 1:
 		return images[0]
-	}
-	if !conway.Has(F.p, m) {
+	case !conway.Has(F.p, m):
 		sum := L.Zero()
 		for _, a := range images {
 			sum = sum.Add(a)
@@ -444,7 +451,7 @@ func combineParts(w *algebra.Work, F *Field, m, n int) Elem {
 		return sum
 	}
 	vectors := make([]*poly.Poly, m)
-	for i, a := range products(w, L, images, fm) {
+	for i, a := range products(w, L, images, f) {
 		vectors[i] = L.vector(a.w)
 	}
 	return L.fromVectorElem(w, combine(w, F.arith, mix(w, F, m), vectors))

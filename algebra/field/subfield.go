@@ -16,9 +16,9 @@ import (
 // Subfield is a subfield of a field L.
 type Subfield struct {
 	Degree            int        // over F_p
-	Field             *Field     // the standard field of that degree
+	Field             *Field     // a presentation of it, see SubfieldOf
 	Into              *Map       // its fixed embedding into L
-	Generator         Elem       // the image of its generator, in L
+	Generator         Elem       // over F_p: the image of the generator of Field, in L
 	MinimalPolynomial Polynomial // of that, over F_p
 }
 
@@ -28,17 +28,36 @@ func Subfields(w *algebra.Work, L *Field) (list []*Subfield, err error) {
 	defer algebra.Catch(&err)
 	for _, d := range integer.DivisorsInt(L.absolute) {
 		w.Poll()
-		K, err := Standard(w, L.p, d)
+		s, err := SubfieldOf(w, L, d)
 		if err != nil {
 			return nil, err
 		}
-		m, err := Embed(w, K, L)
-		if err != nil {
-			return nil, err
-		}
-		list = append(list, &Subfield{d, K, m, m.image, K.Modulus()})
+		list = append(list, s)
 	}
 	return list, nil
+}
+
+// SubfieldOf is the subfield of L of absolute degree d. Its presentation is
+// L itself or the field in the tower of L that has this degree, if its
+// generator generates it over F_p, and the standard field otherwise. It is an
+// error of kind Mismatch when d does not divide the absolute degree of L.
+func SubfieldOf(w *algebra.Work, L *Field, d int) (s *Subfield, err error) {
+	defer algebra.Catch(&err)
+	for F := L; F != nil; F = F.base {
+		if F.absolute == d && (F.base == nil || F.base.base == nil || F.Generator().degreeOver(w, 1) == d) {
+			m := inclusion(w, F, L)
+			return &Subfield{d, F, m, m.image, F.Generator().minimalOverPrime(w)}, nil
+		}
+	}
+	K, err := Standard(w, L.p, d)
+	if err != nil {
+		return nil, err
+	}
+	m, err := Embed(w, K, L)
+	if err != nil {
+		return nil, err
+	}
+	return &Subfield{d, K, m, m.image, K.Modulus()}, nil
 }
 
 // IsSubfield says whether L has a subfield isomorphic to K; it has at most
