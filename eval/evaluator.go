@@ -126,7 +126,7 @@ func (c *cell) node(x lang.Expr) (value.Value, error) {
 	case *lang.Comprehension:
 		return c.comprehension(x)
 	case *lang.Cycle:
-		return nil, algebra.Errorf(algebra.Unable, "permutations are not supported yet")
+		return nil, algebra.Errorf(algebra.Unable, "permutations are not supported")
 	}
 	return nil, fmt.Errorf("expression %T", x)
 }
@@ -199,7 +199,7 @@ func (c *cell) subscript(x *lang.Subscript) (value.Value, error) {
 	case "g":
 		return value.StandardGenerator(c.ctx, q, exponent)
 	}
-	return nil, algebra.Errorf(algebra.Unable, "%s_%s belongs to number fields, which are not supported yet", x.Head, lang.Print(x.Index))
+	return nil, algebra.Errorf(algebra.Unable, "%s_%s belongs to number fields, which are not supported", x.Head, lang.Print(x.Index))
 }
 
 func (c *cell) indexInteger(head string, x lang.Expr) (*big.Int, error) {

@@ -13,7 +13,7 @@ func Adjoin(c *Context, K, modulus Value, letter string) (Value, Value, error) {
 	base, ok := K.(Field)
 	if !ok {
 		if IsRing(K) {
-			return nil, nil, algebra.Errorf(algebra.Unable, "a root is adjoined to finite fields only so far, not to %s", K.Text(nil))
+			return nil, nil, algebra.Errorf(algebra.Unable, "%s(%s) is not supported: only finite fields are extended", K.Text(nil), letter)
 		}
 		return nil, nil, algebra.Errorf(algebra.Invalid, "a root is adjoined to a field, not to %s", K.Kind())
 	}
@@ -76,7 +76,7 @@ func GeneratedBy(c *Context, K Value, name string) (Value, Value, error) {
 func Generate(c *Context, K Value, values []Value) (Value, error) {
 	f, ok := K.(Field)
 	if !ok {
-		return nil, algebra.Errorf(algebra.Unable, "%s(...) is not supported: only finite fields are extended so far", K.Text(nil))
+		return nil, algebra.Errorf(algebra.Unable, "%s(...) is not supported: only finite fields are extended", K.Text(nil))
 	}
 	degree := f.K.AbsoluteDegree()
 	for _, v := range values {

@@ -129,7 +129,7 @@ func NewPolynomialRing(R Value, letters []string) (Value, error) {
 func NewFunctionField(K Value, letter string) (Value, error) {
 	f, ok := K.(Field)
 	if !ok {
-		return nil, algebra.Errorf(algebra.Unable, "rational functions over %s are not supported, only over finite fields", K.Text(nil))
+		return nil, algebra.Errorf(algebra.Unable, "%s(%s) is not supported: only finite fields are extended", K.Text(nil), letter)
 	}
 	return FunctionField{f.K, letter}, nil
 }

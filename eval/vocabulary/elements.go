@@ -5,6 +5,7 @@ import (
 
 	"adjoin/algebra"
 	"adjoin/algebra/field"
+	"adjoin/algebra/integer"
 	"adjoin/eval/value"
 )
 
@@ -144,7 +145,7 @@ var elements = []Entry{
 			{Args: []Arg{{Prep: "of", Kind: Element}, {Prep: "in", Kind: Field, Optional: true}}, Do: squareRoot},
 			{Args: []Arg{{Prep: "of", Kind: Integer}, {Prep: "in", Kind: Field, Optional: true}}, Do: squareRoot},
 		},
-		Examples: []Example{{"square root of 2 in F_7", "3"}, {"square root of g_16", "g_16^2 + 1"}},
+		Examples: []Example{{"square root of 2 in F_7", "3"}, {"sqrt 49", "7"}, {"square root of g_16", "g_16^2 + 1"}},
 	},
 	{
 		Words: "p-th root", Class: Noun, Topic: "elements",
@@ -232,11 +233,16 @@ func inField(c *value.Context, a []value.Value) (field.Elem, error) {
 	if x, ok := a[0].(value.Element); ok {
 		return x.E, nil
 	}
-	return field.Elem{}, algebra.Errorf(algebra.Unable, "roots of integers outside Z are number fields, which are not supported").
-		WithRemedy("say the field: square root of 2 in F_7")
+	return field.Elem{}, algebra.Errorf(algebra.Unable, "%s is no square in Z, and number fields are not supported", a[0].Text(nil)).
+		WithRemedy("in a finite field: square root of 2 in F_7")
 }
 
 func squareRoot(c *value.Context, a []value.Value) (value.Value, error) {
+	if n, ok := a[0].(value.Integer); ok && a[1] == nil && n.N.Sign() >= 0 {
+		if r := integer.Root(n.N, 2); new(big.Int).Mul(r, r).Cmp(n.N) == 0 {
+			return value.Integer{N: r}, nil
+		}
+	}
 	x, err := inField(c, a)
 	if err != nil {
 		return nil, err

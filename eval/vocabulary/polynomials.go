@@ -532,28 +532,27 @@ func reciprocal(f value.Value) value.Value {
 	return f
 }
 
-// squarefree decides by the gcd with the derivative; over the perfect fields
-// at hand that is the same as having no multiple root.
+// squarefree decides whether no factor is repeated; over the perfect fields at
+// hand that is the same as having no multiple root.
 func squarefree(c *value.Context, a []value.Value) (value.Value, error) {
-	f := a[0]
-	if len(coefficients(f)) == 0 {
+	if len(coefficients(a[0])) == 0 {
 		return nil, algebra.Errorf(algebra.Undefined, "every polynomial divides 0")
 	}
-	var d value.Value
-	switch f := f.(type) {
-	case value.Polynomial:
-		d = value.Polynomial{P: f.P.Derivative(), Letter: f.Letter}
-	case value.FieldPolynomial:
-		d = value.FieldPolynomial{P: f.P.Derivative(), Letter: f.Letter}
+	f, ok := a[0].(value.Polynomial)
+	if !ok {
+		return verdict(a[0].(value.FieldPolynomial).P.IsSquarefree(c.W), nil)
 	}
-	g, err := value.GCD(c, f, d)
-	if err != nil {
-		return nil, err
+	g := value.Polynomial{P: f.P.GCD(c.W, f.P.Derivative()), Letter: f.Letter}
+	v := algebra.Because(true, "it has no common factor with its derivative")
+	if g.P.Degree() > 0 {
+		v = algebra.Because(false, "%s divides it and its derivative", g.Text(nil))
 	}
-	v := algebra.Because(len(coefficients(g)) <= 1, "the greatest common divisor with the derivative is constant exactly when no factor is repeated")
-	v.Evidence = v.Evidence.With("gcd of f and f'", g.Text(nil))
 	return verdict(v, nil)
 }
+
+// quickBits bounds the number of bits of q^n up to which the first polynomials
+// of degree n over F_q are found in no time.
+const quickBits = 16
 
 // polynomialsWith lists the monic polynomials of a degree with a property, by
 // the codes of their coefficients, and counts them by a formula.
@@ -572,6 +571,7 @@ func polynomialsWith(c *value.Context, a []value.Value, word string, count func(
 			return word + " polynomials of degree " + degree.String() + " over " + value.RingName(p, a[1])
 		},
 		Count: total,
+		Quick: K.Order().BitLen()*n <= quickBits,
 		Members: func(c *value.Context) iter.Seq2[value.Value, error] {
 			return func(yield func(value.Value, error) bool) {
 				q := K.Order()

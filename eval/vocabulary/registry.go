@@ -63,14 +63,13 @@ func All() []*Entry { return entries }
 // Lookup finds a word of the given class, or nil.
 func Lookup(class Class, words string) *Entry { return index[class][words] }
 
-// Find finds a word of any class, or nil; nouns first.
-func Find(words string) *Entry {
-	for class := Noun; class <= Notation; class++ {
-		if e := index[class][words]; e != nil {
-			return e
-		}
+// Hidden is the constant, or the noun of one word, that a binding of the name
+// would hide, or nil.
+func Hidden(name string) *Entry {
+	if e := index[Constant][name]; e != nil {
+		return e
 	}
-	return nil
+	return index[Noun][name]
 }
 
 // Words lists the words of one class, spellings included, in alphabetical
