@@ -1,6 +1,7 @@
 package ratpoly
 
 import (
+	"fmt"
 	"math/big"
 	"sort"
 
@@ -92,29 +93,21 @@ func factorSquarefree(w *algebra.Work, f []*big.Int) [][]*big.Int {
 	if len(f) == 2 {
 		return [][]*big.Int{f}
 	}
-	if n, ok := rootsOfUnity(f); ok {
+	if indices, ok := unity(f); ok {
 		var list [][]*big.Int
-		for _, d := range integer.DivisorsInt(n) {
+		for _, d := range indices {
 			list = append(list, integer.Cyclotomic(d))
 		}
 		return list
+	}
+	if cyclotomicIndex(w, f) > 0 {
+		return [][]*big.Int{f}
 	}
 	l := bestPrime(w, f)
 	if len(l.factors) == 1 || l.onlyWhole(len(f)-1) {
 		return [][]*big.Int{f}
 	}
 	return l.recombine(w, f)
-}
-
-// rootsOfUnity recognises x^n - 1.
-func rootsOfUnity(f []*big.Int) (n int, ok bool) {
-	n = len(f) - 1
-	for _, x := range f[1:n] {
-		if x.Sign() != 0 {
-			return 0, false
-		}
-	}
-	return n, f[n].Cmp(one) == 0 && f[0].Cmp(big.NewInt(-1)) == 0
 }
 
 // local is a factorization modulo a small prime, and the degrees that factors
@@ -361,10 +354,13 @@ func (f Poly) IsIrreducible(w *algebra.Work) algebra.Verdict {
 	if len(c) == 2 {
 		return algebra.Because(true, "its degree is 1")
 	}
-	if p := eisenstein(w, c); p != nil {
-		v := algebra.Because(true, "Eisenstein's criterion holds at %v", p)
-		v.Evidence.Source = "G. Eisenstein, Über die Irreductibilität, 1850"
-		v.Evidence = v.Evidence.With("prime", p)
+	if v, ok := byEisenstein(w, c); ok {
+		return v
+	}
+	if n := cyclotomicIndex(w, c); n > 0 {
+		v := algebra.Because(true, "it is the cyclotomic polynomial of index %d", n)
+		v.Evidence.Source = "R. Dedekind, Beweis für die Irreductibilität der Kreistheilungs-Gleichungen, 1857"
+		v.Evidence = v.Evidence.With("index", n)
 		return v
 	}
 	if _, list := f.Factor(w); len(list) > 1 || list[0].E > 1 {
@@ -388,6 +384,38 @@ func (f Poly) IsIrreducible(w *algebra.Work) algebra.Verdict {
 	v.Evidence = v.Evidence.With("prime", l.p)
 	v.Evidence.Source = "H. Zassenhaus, On Hensel factorization I, 1969"
 	return v
+}
+
+// mostShifted is the degree up to which Eisenstein's criterion is also tried
+// for f(x+a), small a.
+const mostShifted = 200
+
+// byEisenstein says that f is irreducible when Eisenstein's criterion holds for
+// f(x) or for f(x+a) with a small a.
+func byEisenstein(w *algebra.Work, c []*big.Int) (algebra.Verdict, bool) {
+	for _, a := range []int64{0, 1, -1, 2, -2} {
+		if a != 0 && len(c) > mostShifted {
+			break
+		}
+		shifted := c
+		if a != 0 {
+			shifted = Poly{c, nil}.Compose(w, FromInts(a, 1)).c
+		}
+		p := eisenstein(w, shifted)
+		if p == nil {
+			continue
+		}
+		v := algebra.Because(true, "Eisenstein's criterion holds at %v", p)
+		if a != 0 {
+			where := fmt.Sprintf("f(x%+d)", a)
+			v = algebra.Because(true, "Eisenstein's criterion holds at %v for %s", p, where)
+			v.Evidence = v.Evidence.With(where, Poly{shifted, nil})
+		}
+		v.Evidence.Source = "G. Eisenstein, Über die Irreductibilität, 1850"
+		v.Evidence = v.Evidence.With("prime", p)
+		return v, true
+	}
+	return algebra.Verdict{}, false
 }
 
 // eisenstein is a prime at which Eisenstein's criterion holds, or nil. Only

@@ -25,7 +25,7 @@ func images(w *algebra.Work, f func(p *big.Int, A poly.Arith) bool) {
 	}
 }
 
-// Mod is the image of integer coefficients over a prime field.
+// mod is the image of integer coefficients over a prime field.
 func mod(A poly.Arith, c []*big.Int) *poly.Poly {
 	f, e := new(poly.Poly), make(poly.Elem, A.Width())
 	for i := len(c) - 1; i >= 0; i-- {
@@ -189,9 +189,7 @@ func (f Poly) Resultant(w *algebra.Work, g Poly) *big.Rat {
 
 // resultant works modulo primes up to Hadamard's bound ||f||^deg g ||g||^deg f.
 func resultant(w *algebra.Work, f, g []*big.Int) *big.Int {
-	bound := new(big.Int).Exp(norm(f), big.NewInt(int64(len(g)-1)), nil)
-	bound.Mul(bound, new(big.Int).Exp(norm(g), big.NewInt(int64(len(f)-1)), nil))
-	bound.Lsh(bound, 1)
+	bound := sylvester(w, f, g)
 	var c crt
 	images(w, func(p *big.Int, A poly.Arith) bool {
 		a, b := mod(A, f), mod(A, g)
@@ -202,6 +200,28 @@ func resultant(w *algebra.Work, f, g []*big.Int) *big.Int {
 		return c.modulus.Cmp(bound) <= 0
 	})
 	return c.balanced()[0]
+}
+
+// sylvester is twice Hadamard's bound of the minors of Sylvester's matrix of f
+// and g; the size is checked first.
+func sylvester(w *algebra.Work, f, g []*big.Int) *big.Int {
+	a, b := norm(f), norm(g)
+	limit(len(g)-1, a.BitLen())
+	limit(len(f)-1, b.BitLen())
+	w.Poll()
+	bound := a.Exp(a, big.NewInt(int64(len(g)-1)), nil)
+	bound.Mul(bound, b.Exp(b, big.NewInt(int64(len(f)-1)), nil))
+	return bound.Lsh(bound, 1)
+}
+
+// Lift is the polynomial whose coefficients are the residues of least absolute
+// value of those of f, over a prime field.
+func Lift(A poly.Arith, f *poly.Poly) Poly {
+	c := make([]*big.Int, f.N)
+	for i := range c {
+		c[i] = balance(A.Code(poly.Coeff(A, f, i)), A.Characteristic())
+	}
+	return over(c, one)
 }
 
 // Discriminant is lead(f)^(2n-2) times the product of (a - b)^2 over pairs of

@@ -21,6 +21,19 @@ var (
 	one  = big.NewInt(1)
 )
 
+// MostBits is the largest size of a result, in bits of all its coefficients:
+// a computation that would pass it ends at once with an error of kind
+// TooLarge.
+const MostBits = 1 << 31
+
+// limit refuses n coefficients of the given length when they pass MostBits.
+func limit(n, bits int) {
+	if float64(n)*float64(bits) > MostBits {
+		algebra.Fail(algebra.Errorf(algebra.TooLarge,
+			"a result of %d coefficients with up to %d bits each passes the limit of %d bits", n, bits, MostBits))
+	}
+}
+
 // New is the polynomial with these coefficients, constant term first.
 func New(coeffs []*big.Rat) Poly {
 	d := big.NewInt(1)
@@ -79,6 +92,7 @@ func X() Poly { return Monomial(1) }
 
 // Monomial is x^n.
 func Monomial(n int) Poly {
+	limit(n, 64)
 	c := make([]*big.Int, n+1)
 	for i := range n {
 		c[i] = zero
@@ -93,6 +107,7 @@ func Constant(q *big.Rat) Poly { return New([]*big.Rat{q}) }
 // Cyclotomic is the n-th cyclotomic polynomial.
 func Cyclotomic(w *algebra.Work, n int) Poly {
 	w.Poll()
+	limit(integer.EulerPhiInt(n), 64)
 	return over(integer.Cyclotomic(n), one)
 }
 
@@ -195,6 +210,7 @@ func mul(w *algebra.Work, a, b []*big.Int) []*big.Int {
 		return nil
 	}
 	w.Poll()
+	limit(len(a)+len(b), bits(a)+bits(b))
 	if min(len(a), len(b)) >= KroneckerThreshold {
 		return mulKronecker(a, b)
 	}
@@ -285,6 +301,7 @@ func (f Poly) DivRem(w *algebra.Work, g Poly) (q, r Poly) {
 	// lead^k f = q g + r over the integers, and so for any larger power.
 	lead := g.c[len(g.c)-1]
 	k := len(f.c) - len(g.c) + 1
+	limit(len(f.c), k*lead.BitLen()+bits(f.c))
 	power := new(big.Int).Exp(lead, big.NewInt(int64(k+k%2)), nil) // positive
 	scaled := make([]*big.Int, len(f.c))
 	for i, x := range f.c {
@@ -293,6 +310,20 @@ func (f Poly) DivRem(w *algebra.Work, g Poly) (q, r Poly) {
 	quo, rem, _ := divInts(w, scaled, g.c)
 	return over(quo, one).Scale(new(big.Rat).SetFrac(g.den(), new(big.Int).Mul(power, f.den()))),
 		over(rem, new(big.Int).Mul(power, f.den()))
+}
+
+// PseudoDivRem is the q and the r with lead(g)^(deg f - deg g + 1) f = q g + r
+// and deg r < deg g, which are integral when f and g are. When deg f < deg g, q
+// is 0 and r is f. g is not zero.
+func (f Poly) PseudoDivRem(w *algebra.Work, g Poly) (q, r Poly) {
+	k := len(f.c) - len(g.c) + 1
+	if k <= 0 {
+		return Poly{}, f
+	}
+	lead := g.Coefficient(g.Degree())
+	limit(len(f.c), k*(lead.Num().BitLen()+lead.Denom().BitLen())+bits(f.c))
+	e := big.NewInt(int64(k))
+	return f.Scale(new(big.Rat).SetFrac(new(big.Int).Exp(lead.Num(), e, nil), new(big.Int).Exp(lead.Denom(), e, nil))).DivRem(w, g)
 }
 
 // divInts divides when every coefficient of the quotient is an integer.
@@ -396,6 +427,9 @@ func (f Poly) Eval(w *algebra.Work, q *big.Rat) *big.Rat {
 
 // Compose is f(g).
 func (f Poly) Compose(w *algebra.Work, g Poly) Poly {
+	if n := f.Degree(); n > 0 {
+		limit(n*max(g.Degree(), 0)+1, n*bits(g.c)+bits(f.c))
+	}
 	var z Poly
 	for i := len(f.c) - 1; i >= 0; i-- {
 		z = z.Mul(w, g).Add(over([]*big.Int{f.c[i]}, one))
