@@ -25,7 +25,7 @@ func TestCompleteInALine(t *testing.T) {
 		{"", "1 + K|", "1 + Ko|", ""},
 		{"", "1 + Ko|", "1 + Ko|", "Kobold"},
 		{"f(\n", "Kom|", "Komet|", ""},
-		{"", "2α|", "2αβ|", ""},
+		{"", "2 * α|", "2 * αβ|", ""},
 		{"", "qqq|", "qqq|", ""},
 	} {
 		var screen bytes.Buffer
