@@ -1,7 +1,6 @@
 package value
 
 import (
-	"fmt"
 	"iter"
 	"math/big"
 
@@ -11,21 +10,6 @@ import (
 	"adjoin/algebra/poly"
 )
 
-// traces is the matrix of trace(a_i b_j) over K: row i, column j.
-func (e Extension) traces(c *Context, a, b []field.Elem) (*linalg.Matrix, error) {
-	m := linalg.New(e.K.Arith(), len(a), len(b))
-	for i := range a {
-		for j := range b {
-			t, err := a[i].Mul(c.W, b[j]).Trace(c.W, e.K)
-			if err != nil {
-				return nil, err
-			}
-			m.Set(i, j, t.Raw())
-		}
-	}
-	return m, nil
-}
-
 // DualBasis is the basis C with trace(b_i c_j) = 1 for i = j and 0 otherwise.
 // It solves (trace(b_i b_k)) X = 1; c_j is the combination of B by column j.
 func (e Extension) DualBasis(c *Context, b []field.Elem) ([]field.Elem, error) {
@@ -33,9 +17,15 @@ func (e Extension) DualBasis(c *Context, b []field.Elem) ([]field.Elem, error) {
 	if len(b) != n {
 		return nil, algebra.Errorf(algebra.Invalid, "a basis of %s over %s has %d elements, not %d", nameOf(c.Printer(), e.L), nameOf(c.Printer(), e.K), n, len(b))
 	}
-	m, err := e.traces(c, b, b)
-	if err != nil {
-		return nil, err
+	m := linalg.New(e.K.Arith(), n, n)
+	for i := range b {
+		for j := range b {
+			t, err := b[i].Mul(c.W, b[j]).Trace(c.W, e.K)
+			if err != nil {
+				return nil, err
+			}
+			m.Set(i, j, t.Raw())
+		}
 	}
 	x, ok := m.Inverse(c.W)
 	if !ok {
@@ -61,56 +51,8 @@ func notBasis(c *Context, e Extension) error {
 	return algebra.Errorf(algebra.Invalid, "these elements are linearly dependent over %s: they are no basis", nameOf(c.Printer(), e.K))
 }
 
-// Coordinates of x in the basis b of L/K: the elements x_i of K with
-// x = sum x_i b_i. They are the traces of x with the dual basis.
-func (e Extension) Coordinates(c *Context, x field.Elem, b []field.Elem) ([]field.Elem, error) {
-	dual, err := e.DualBasis(c, b)
-	if err != nil {
-		return nil, err
-	}
-	list := make([]field.Elem, len(b))
-	for i, d := range dual {
-		if list[i], err = x.Mul(c.W, d).Trace(c.W, e.K); err != nil {
-			return nil, err
-		}
-	}
-	return list, nil
-}
-
-// IsNormal decides whether the conjugates of x over K form a basis of L/K: the
-// matrix of the traces of their products must be invertible.
-func (e Extension) IsNormal(c *Context, x field.Elem) (algebra.Verdict, error) {
-	list, err := x.Conjugates(c.W, e.K)
-	if err != nil {
-		return algebra.Verdict{}, err
-	}
-	if len(list) < e.Degree() {
-		return algebra.Because(false, "it has %d conjugates over %s, fewer than the degree %d", len(list), nameOf(c.Printer(), e.K), e.Degree()), nil
-	}
-	m, err := e.traces(c, list, list)
-	if err != nil {
-		return algebra.Verdict{}, err
-	}
-	rank := m.Rank(c.W)
-	v := algebra.Because(rank == e.Degree(), "the matrix of the traces of the products of its conjugates has rank %d of %d", rank, e.Degree())
-	v.Evidence.Source = "R. Lidl and H. Niederreiter, Finite Fields, 1997, theorem 2.37"
-	return v, nil
-}
-
-// NormalElement is the first element, by code, whose conjugates form a basis.
-func (e Extension) NormalElement(c *Context) (field.Elem, error) {
-	for n := big.NewInt(1); n.Cmp(e.L.Order()) < 0; n.Add(n, big.NewInt(1)) {
-		c.W.Poll()
-		x := e.L.Element(n)
-		v, err := e.IsNormal(c, x)
-		if err != nil || v.Holds {
-			return x, err
-		}
-	}
-	return field.Elem{}, fmt.Errorf("no normal element")
-}
-
-// NormalElements lists them, and counts them by the units of K[x]/(x^n - 1).
+// NormalElements lists the elements of L whose conjugates form a basis of L/K,
+// by their codes, and counts them by the units of K[x]/(x^n - 1).
 func (e Extension) NormalElements(c *Context) (Value, error) {
 	n := e.Degree()
 	coefficients := make([]field.Elem, n+1)
@@ -118,9 +60,6 @@ func (e Extension) NormalElements(c *Context) (Value, error) {
 		coefficients[i] = e.K.Zero()
 	}
 	coefficients[n], coefficients[0] = e.K.One(), e.K.One().Neg()
-	if n == 0 {
-		return nil, fmt.Errorf("degree 0")
-	}
 	// The number of residues prime to f is the product of
 	// q^(d (m-1)) (q^d - 1) over the irreducible factors, of degree d and
 	// multiplicity m.
@@ -139,7 +78,7 @@ func (e Extension) NormalElements(c *Context) (Value, error) {
 				for n := big.NewInt(1); n.Cmp(e.L.Order()) < 0; n.Add(n, big.NewInt(1)) {
 					c.W.Poll()
 					x := e.L.Element(n)
-					v, err := e.IsNormal(c, x)
+					v, err := x.IsNormal(c.W, e.K)
 					if err == nil && !v.Holds {
 						continue
 					}

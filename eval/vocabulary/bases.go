@@ -9,10 +9,15 @@ import (
 var bases = []Entry{
 	{
 		Words: "basis", Class: Noun, Topic: "bases",
-		Meaning: "the powers 1, a, a^2, ... of a generator of L over K, as a list",
+		Meaning: "the powers 1, c, c^2, ... of a generator c of L over K, that of L when it serves, as a list",
 		Source:  "R. Lidl and H. Niederreiter, Finite Fields, 1997, section 2.3",
 		Cases: []Case{{Args: []Arg{{Prep: "of", Kind: Extension}}, Do: func(c *value.Context, a []value.Value) (value.Value, error) {
-			return powerBasis(c, a[0].(value.Extension)), nil
+			e := a[0].(value.Extension)
+			b, err := field.PowerBasis(c.W, e.L, e.K)
+			if err != nil {
+				return nil, err
+			}
+			return elementList(b.Elements()), nil
 		}}},
 		Examples: []Example{{"basis of F_16/F_2", "[1, g_16, g_16^2, g_16^3]"}, {"basis of F_16/F_4", "[1, g_16]"}},
 	},
@@ -22,12 +27,11 @@ var bases = []Entry{
 		Source:  "R. Lidl and H. Niederreiter, Finite Fields, 1997, theorem 2.35",
 		Cases: []Case{{Args: []Arg{{Prep: "of", Kind: Extension}}, Do: func(c *value.Context, a []value.Value) (value.Value, error) {
 			e := a[0].(value.Extension)
-			x, err := e.NormalElement(c)
+			b, err := field.NormalBasis(c.W, e.L, e.K)
 			if err != nil {
 				return nil, err
 			}
-			list, err := x.Conjugates(c.W, e.K)
-			return elementList(list), err
+			return elementList(b.Elements()), nil
 		}}},
 		Examples: []Example{{"normal basis of F_8/F_2", "[g_8 + 1, g_8^2 + 1, g_8^2 + g_8 + 1]"}},
 	},
@@ -51,7 +55,11 @@ var bases = []Entry{
 		Meaning: "the coefficients of an element in a basis of L/K, in the order of the basis",
 		Cases: []Case{
 			{Args: []Arg{{Prep: "of", Kind: Element}, {Prep: "in", Kind: Basis}, {Prep: "over", Kind: Field, Optional: true}}, Do: func(c *value.Context, a []value.Value) (value.Value, error) {
-				return coordinatesIn(c, a[0].(value.Element), a[1].(value.List), a[2])
+				b, err := basisFor(c, a[:1], a[1].(value.List), a[2])
+				if err != nil {
+					return nil, err
+				}
+				return coordinates(c, b, a[0])
 			}},
 		},
 		Examples: []Example{{"coordinates of g_8^4 in [1, g_8, g_8^2]", "[0, 1, 1]"}},
@@ -76,18 +84,8 @@ var normalElementCase = Case{
 		if err != nil {
 			return nil, err
 		}
-		return verdict(e.IsNormal(c, x.E))
+		return verdict(x.E.IsNormal(c.W, e.K))
 	},
-}
-
-func powerBasis(c *value.Context, e value.Extension) value.List {
-	list := make([]field.Elem, e.Degree())
-	x := e.L.One()
-	for i := range list {
-		list[i] = x
-		x = x.Mul(c.W, e.L.Generator())
-	}
-	return elementList(list)
 }
 
 func elementsIn(c *value.Context, l value.List, L *field.Field) ([]field.Elem, error) {
@@ -102,48 +100,45 @@ func elementsIn(c *value.Context, l value.List, L *field.Field) ([]field.Elem, e
 	return list, nil
 }
 
-// coordinatesIn solves for the coordinates of x in a basis over K; without K
-// the size of the basis says which subfield it is over.
-func coordinatesIn(c *value.Context, x value.Element, basis value.List, over value.Value) (value.Value, error) {
-	e, b, err := extensionOfBasis(c, x, basis, over)
-	if err != nil {
-		return nil, err
-	}
-	y, err := value.ToField(c, x, e.L)
-	if err != nil {
-		return nil, err
-	}
-	list, err := e.Coordinates(c, y.E, b)
-	return elementList(list), err
-}
-
-func extensionOfBasis(c *value.Context, x value.Element, basis value.List, over value.Value) (value.Extension, []field.Elem, error) {
-	L := x.E.Field()
-	for _, v := range basis.Items {
-		M, _, _, err := field.Common(c.W, L, v.(value.Element).E.Field())
+// basisFor is the basis with the given elements of a field that holds the
+// objects too. Without over, the number of elements says over which subfield
+// it is one.
+func basisFor(c *value.Context, objects []value.Value, basis value.List, over value.Value) (*field.Basis, error) {
+	L := basis.Items[0].(value.Element).E.Field()
+	for _, v := range append(objects[:len(objects):len(objects)], basis.Items...) {
+		x, ok := v.(value.Element)
+		if !ok {
+			continue
+		}
+		M, _, _, err := field.Common(c.W, L, x.E.Field())
 		if err != nil {
-			return value.Extension{}, nil, err
+			return nil, err
 		}
 		L = M
 	}
 	n := len(basis.Items)
-	K := over
-	if K == nil {
+	if over == nil {
 		if L.AbsoluteDegree()%n != 0 {
-			return value.Extension{}, nil, algebra.Errorf(algebra.Invalid, "%d elements are no basis of %s over a subfield", n, value.Field{K: L}.Text(nil))
+			return nil, algebra.Errorf(algebra.Invalid, "%d elements are no basis of %s over a subfield", n, value.RingName(c.Printer(), value.Field{K: L}))
 		}
-		var err error
-		if K, err = subfieldOfDegree(c, L, L.AbsoluteDegree()/n); err != nil {
-			return value.Extension{}, nil, err
+		K, err := subfieldOfDegree(c, L, L.AbsoluteDegree()/n)
+		if err != nil {
+			return nil, err
 		}
-	}
-	e, err := value.Operate(c, "/", value.Field{K: L}, K)
-	if err != nil {
-		return value.Extension{}, nil, err
-	}
-	if d := e.(value.Extension).Degree(); d != n {
-		return value.Extension{}, nil, algebra.Errorf(algebra.Invalid, "a basis has %d elements here, not %d", d, n)
+		over = K
 	}
 	b, err := elementsIn(c, basis, L)
-	return e.(value.Extension), b, err
+	if err != nil {
+		return nil, err
+	}
+	return field.NewBasis(c.W, L, over.(value.Field).K, b)
+}
+
+// coordinates lists the coordinates of x in the order of the basis.
+func coordinates(c *value.Context, b *field.Basis, x value.Value) (value.List, error) {
+	y, err := value.ToField(c, x, b.Field())
+	if err != nil {
+		return value.List{}, err
+	}
+	return elementList(b.Coordinates(c.W, y.E)), nil
 }

@@ -1,11 +1,11 @@
 package vocabulary
 
 import (
-	"fmt"
 	"math/big"
 	"sort"
 
 	"adjoin/algebra"
+	"adjoin/algebra/field"
 	"adjoin/eval/value"
 )
 
@@ -100,8 +100,12 @@ var collections = []Entry{
 				return nil, err
 			}
 			K := a[1].(value.Field).K
-			code := value.RandomBelow(c, new(big.Int).Exp(K.Order(), n, nil))
-			return value.FieldPolynomial{P: monicFromCode(K, int(n.Int64()), code), Letter: "x"}, nil
+			list := make([]field.Elem, n.Int64()+1)
+			for i := range list {
+				list[i] = K.Element(value.RandomBelow(c, K.Order()))
+			}
+			list[len(list)-1] = K.One()
+			return value.FieldPolynomial{P: field.NewPolynomial(K, list), Letter: "x"}, nil
 		}}},
 		Examples: []Example{{"degree of random polynomial of degree 5 over F_3", "5"}},
 	},
@@ -198,31 +202,27 @@ func randomMember(c *value.Context, l value.Collection) (value.Value, error) {
 // matrixOfMap has the coordinates of the image of the j-th element of the
 // basis in its j-th column.
 func matrixOfMap(c *value.Context, a []value.Value) (value.Value, error) {
-	f, basis := a[0].(value.Callable), a[1].(value.List)
-	n := len(basis.Items)
-	rows := make([][]value.Value, n)
-	for i := range rows {
-		rows[i] = make([]value.Value, n)
+	f, list := a[0].(value.Callable), a[1].(value.List)
+	images := make([]value.Value, len(list.Items))
+	for j, x := range list.Items {
+		y, err := f.Call(c, []value.Value{x})
+		if err != nil {
+			return nil, err
+		}
+		images[j] = y
 	}
-	for j, b := range basis.Items {
-		y, err := f.Call(c, []value.Value{b})
+	b, err := basisFor(c, images, list, a[2])
+	if err != nil {
+		return nil, err
+	}
+	rows := make([][]value.Value, len(images))
+	for _, y := range images {
+		column, err := coordinates(c, b, y)
 		if err != nil {
 			return nil, err
 		}
-		x, ok := y.(value.Element)
-		if !ok {
-			return nil, algebra.Errorf(algebra.Invalid, "the map sends a basis element to %s", y.Kind())
-		}
-		column, err := coordinatesIn(c, x, basis, a[2])
-		if err != nil {
-			return nil, err
-		}
-		items := column.(value.List).Items
-		if len(items) != n {
-			return nil, fmt.Errorf("%d coordinates in a basis of %d", len(items), n)
-		}
-		for i, v := range items {
-			rows[i][j] = v
+		for i, v := range column.Items {
+			rows[i] = append(rows[i], v)
 		}
 	}
 	return value.NewMatrix(c, rows)

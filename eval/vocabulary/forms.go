@@ -93,12 +93,22 @@ var forms = []Entry{
 		Words: "coordinates", Class: Form, Topic: "forms",
 		Meaning: "shows an element by its coordinates in the basis B, in the order of B",
 		Cases: []Case{{Args: []Arg{{Kind: Shown}, {Prep: "in", Kind: Basis}}, Do: func(c *value.Context, a []value.Value) (value.Value, error) {
-			t, err := eachElement(c, value.Plain(a[0]), func(x value.Element) (string, error) {
-				l, err := coordinatesIn(c, x, a[1].(value.List), nil)
+			v := value.Plain(a[0])
+			objects := []value.Value{v}
+			if l, ok := v.(value.Collection); ok {
+				items, err := value.Members(c, l)
 				if err != nil {
-					return "", err
+					return nil, err
 				}
-				return l.Text(nil), nil
+				objects = items
+			}
+			b, err := basisFor(c, objects, a[1].(value.List), nil)
+			if err != nil {
+				return nil, err
+			}
+			t, err := eachValue(c, v, func(x value.Value) (string, error) {
+				l, err := coordinates(c, b, x)
+				return l.Text(nil), err
 			})
 			if err != nil {
 				return nil, err
@@ -354,14 +364,4 @@ func eachValue(c *value.Context, v value.Value, text func(value.Value) (string, 
 		}
 	}
 	return "[" + strings.Join(parts, ", ") + "]", nil
-}
-
-func eachElement(c *value.Context, v value.Value, text func(value.Element) (string, error)) (string, error) {
-	return eachValue(c, v, func(x value.Value) (string, error) {
-		e, ok := x.(value.Element)
-		if !ok {
-			return "", algebra.Errorf(algebra.Invalid, "this form shows elements of finite fields, not %s", x.Kind())
-		}
-		return text(e)
-	})
 }

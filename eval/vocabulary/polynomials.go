@@ -6,7 +6,6 @@ import (
 
 	"adjoin/algebra"
 	"adjoin/algebra/field"
-	"adjoin/algebra/integer"
 	"adjoin/eval/value"
 )
 
@@ -238,8 +237,11 @@ var polynomials = []Entry{
 		Meaning: "the monic irreducible polynomials of a degree over a finite field, in canonical order",
 		Source:  "R. Lidl and H. Niederreiter, Finite Fields, 1997, theorem 3.25 (their number)",
 		Cases: []Case{{Args: []Arg{{Prep: "of", Role: "degree", Kind: Natural}, {Prep: "over", Kind: Field}}, Do: func(c *value.Context, a []value.Value) (value.Value, error) {
-			return polynomialsWith(c, a, "irreducible", countIrreducible, func(c *value.Context, f field.Polynomial) (algebra.Verdict, error) {
-				return f.IsIrreducible(c.W), nil
+			K := a[1].(value.Field).K
+			return polynomialsWith(c, a, "irreducible", func(n int) (*big.Int, error) {
+				return field.CountIrreducible(K.Order(), n), nil
+			}, func(c *value.Context, n int) (iter.Seq[field.Polynomial], error) {
+				return field.IrreduciblePolynomials(c.W, K, n), nil
 			})
 		}}},
 		Examples: []Example{
@@ -252,8 +254,11 @@ var polynomials = []Entry{
 		Meaning: "the monic polynomials of a degree whose roots generate the multiplicative group of the extension, in canonical order",
 		Source:  "R. Lidl and H. Niederreiter, Finite Fields, 1997, definition 3.15",
 		Cases: []Case{{Args: []Arg{{Prep: "of", Role: "degree", Kind: Natural}, {Prep: "over", Kind: Field}}, Do: func(c *value.Context, a []value.Value) (value.Value, error) {
-			return polynomialsWith(c, a, "primitive", countPrimitive, func(c *value.Context, f field.Polynomial) (algebra.Verdict, error) {
-				return f.IsPrimitive(c.W)
+			K := a[1].(value.Field).K
+			return polynomialsWith(c, a, "primitive", func(n int) (*big.Int, error) {
+				return field.CountPrimitive(c.W, K, n)
+			}, func(c *value.Context, n int) (iter.Seq[field.Polynomial], error) {
+				return field.PrimitivePolynomials(c.W, K, n)
 			})
 		}}},
 		Examples: []Example{{"number of primitive polynomials of degree 8 over F_2", "16"}},
@@ -554,15 +559,18 @@ func squarefree(c *value.Context, a []value.Value) (value.Value, error) {
 // of degree n over F_q are found in no time.
 const quickBits = 16
 
-// polynomialsWith lists the monic polynomials of a degree with a property, by
-// the codes of their coefficients, and counts them by a formula.
-func polynomialsWith(c *value.Context, a []value.Value, word string, count func(c *value.Context, K *field.Field, n int) (*big.Int, error), has func(c *value.Context, f field.Polynomial) (algebra.Verdict, error)) (value.Value, error) {
+// polynomialsWith lists the polynomials of a degree with a property, which
+// count and list know.
+func polynomialsWith(c *value.Context, a []value.Value, word string, count func(n int) (*big.Int, error), list func(c *value.Context, n int) (iter.Seq[field.Polynomial], error)) (value.Value, error) {
 	degree, K := a[0].(value.Integer).N, a[1].(value.Field).K
 	if err := c.CheckDegree(degree); err != nil {
 		return nil, err
 	}
 	n := int(degree.Int64())
-	total, err := count(c, K, n)
+	if err := c.CheckBits(float64(K.Order().BitLen()) * float64(n)); err != nil {
+		return nil, err
+	}
+	total, err := count(n)
 	if err != nil {
 		return nil, err
 	}
@@ -574,60 +582,17 @@ func polynomialsWith(c *value.Context, a []value.Value, word string, count func(
 		Quick: K.Order().BitLen()*n <= quickBits,
 		Members: func(c *value.Context) iter.Seq2[value.Value, error] {
 			return func(yield func(value.Value, error) bool) {
-				q := K.Order()
-				end := new(big.Int).Exp(q, degree, nil)
-				for code := new(big.Int); code.Cmp(end) < 0; code.Add(code, big.NewInt(1)) {
-					c.W.Poll()
-					f := monicFromCode(K, n, code)
-					v, err := has(c, f)
-					if err == nil && !v.Holds {
-						continue
-					}
-					if !yield(value.FieldPolynomial{P: f, Letter: "x"}, err) {
+				polynomials, err := list(c, n)
+				if err != nil {
+					yield(nil, err)
+					return
+				}
+				for f := range polynomials {
+					if !yield(value.FieldPolynomial{P: f, Letter: "x"}, nil) {
 						return
 					}
 				}
 			}
 		},
 	}, nil
-}
-
-// monicFromCode is the monic polynomial of degree n whose other coefficients,
-// from the constant term up, have the digits of code in base |K| as codes.
-func monicFromCode(K *field.Field, n int, code *big.Int) field.Polynomial {
-	c := make([]field.Elem, n+1)
-	q, rest, digit := K.Order(), new(big.Int).Set(code), new(big.Int)
-	for i := range n {
-		rest.QuoRem(rest, q, digit)
-		c[i] = K.Element(new(big.Int).Set(digit))
-	}
-	c[n] = K.One()
-	return field.NewPolynomial(K, c)
-}
-
-// countIrreducible is (1/n) sum over d | n of mu(d) q^(n/d).
-func countIrreducible(c *value.Context, K *field.Field, n int) (*big.Int, error) {
-	q := K.Order()
-	if err := c.CheckBits(float64(q.BitLen()) * float64(n)); err != nil {
-		return nil, err
-	}
-	sum := new(big.Int)
-	for _, d := range integer.DivisorsInt(n) {
-		t := new(big.Int).Exp(q, big.NewInt(int64(n/d)), nil)
-		sum.Add(sum, t.Mul(t, big.NewInt(int64(integer.Mobius(d)))))
-	}
-	return sum.Quo(sum, big.NewInt(int64(n))), nil
-}
-
-// countPrimitive is phi(q^n - 1)/n.
-func countPrimitive(c *value.Context, K *field.Field, n int) (*big.Int, error) {
-	if err := c.CheckBits(float64(K.Order().BitLen()) * float64(n)); err != nil {
-		return nil, err
-	}
-	f := integer.FactorPower(c.W, K.Characteristic(), n*K.AbsoluteDegree())
-	if !f.Complete() {
-		return nil, algebra.Errorf(algebra.Unable, "%s^%d - 1 was not factored completely", K.Characteristic(), n*K.AbsoluteDegree())
-	}
-	phi := integer.EulerPhi(f)
-	return phi.Quo(phi, big.NewInt(int64(n))), nil
 }
