@@ -23,15 +23,24 @@ type level struct{ bound, curves int }
 // levels are the customary choices for prime factors of 15, 20 and 25 digits.
 var levels = []level{{2000, 25}, {11000, 90}, {50000, 150}}
 
-// ecm is a proper divisor of a composite n, or nil.
-func ecm(w *algebra.Work, n *big.Int, step int) *big.Int {
+// effort bounds the work on one number, in products of words: some ten
+// seconds. Long numbers get fewer curves.
+const effort = 5e9
+
+// ecm is a proper divisor of a composite n, or nil when the effort did not
+// find one.
+func ecm(w *algebra.Work, n *big.Int) *big.Int {
 	r := seeded(n)
+	words := float64(n.BitLen()/64 + 2)
+	left := effort
 	for _, l := range levels {
-		if l.bound > 11000 && n.BitLen() > 800 {
-			return nil
-		}
 		primes := PrimesUpTo(50 * l.bound)
 		for range l.curves {
+			// Some 16 products a bit in the first stage, and as many again in the
+			// second.
+			if left -= 32 * float64(l.bound) * 2 * words * words; left < 0 {
+				return nil
+			}
 			if d := newCurve(n, 6+r.Int64N(1<<40)).run(w, l.bound, primes); d != nil {
 				return d
 			}
@@ -183,13 +192,15 @@ func (c *curve) run(w *algebra.Work, bound int, primes []int) *big.Int {
 // same abscissa, so the product of the differences is collected.
 func (c *curve) second(w *algebra.Work, p point, primes []int) *big.Int {
 	const giant = 420
-	baby := map[int]point{}
-	// Odd multiples by steps of 2 p.
+	// The odd multiples by steps of 2 p, and their x z.
+	var baby [giant/2 + 1]struct{ x, z, xz []uint64 }
 	double := c.point()
 	c.double(double, p)
 	a, b := c.times(1, p), c.times(3, p)
 	for j := 1; j <= giant/2; j += 2 {
-		baby[j] = point{append([]uint64(nil), a.x...), append([]uint64(nil), a.z...)}
+		xz := c.number()
+		c.mul(xz, a.x, a.z)
+		baby[j] = struct{ x, z, xz []uint64 }{a.x, a.z, xz}
 		next := c.point()
 		c.add(next, b, double, a)
 		a, b = b, next
@@ -202,21 +213,32 @@ func (c *curve) second(w *algebra.Work, p point, primes []int) *big.Int {
 		copy(before.x, c.m.One())
 	}
 	product := append([]uint64(nil), c.m.One()...)
-	x, y := c.number(), c.number()
+	x, y, xz := c.number(), c.number(), c.number()
+	c.mul(xz, at.x, at.z)
+	next := c.point()
+	var used [giant/2 + 1]bool // j stands for both primes giant*k +- j
 	for _, q := range primes {
 		for kq := (q + giant/2) / giant; k < kq; k++ {
 			w.Poll()
-			next := c.point()
 			c.add(next, at, step, before)
-			before, at = at, next
+			before, at, next = at, next, before
+			c.mul(xz, at.x, at.z)
+			clear(used[:])
 		}
 		j := q - k*giant
 		if j < 0 {
 			j = -j
 		}
-		c.mul(x, at.x, baby[j].z)
-		c.mul(y, at.z, baby[j].x)
-		c.m.SubVec(x, x, y)
+		if used[j] {
+			continue
+		}
+		used[j] = true
+		// x z' - x' z = (x - x')(z + z') - x z + x' z'
+		c.m.SubVec(x, at.x, baby[j].x)
+		c.m.AddVec(y, at.z, baby[j].z)
+		c.mul(x, x, y)
+		c.m.SubVec(x, x, xz)
+		c.m.AddVec(x, x, baby[j].xz)
 		c.mul(product, product, x)
 	}
 	return c.divisor(product)

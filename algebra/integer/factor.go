@@ -12,10 +12,8 @@ import (
 // References:
 //
 //	[Brent] R. Brent, An improved Monte Carlo factorization algorithm, 1980.
-//	[Pollard] J. Pollard, Theorems on factorization and primality testing,
-//	  1974: the p-1 method.
-//	[Lenstra] H. Lenstra, Factoring integers with elliptic curves, 1987; see
-//	  ecm.go.
+//
+// The methods p-1 and of elliptic curves have files of their own.
 
 // PrimePower is P^E.
 type PrimePower struct {
@@ -61,13 +59,16 @@ func (f Factorization) Distinct() []*big.Int {
 // division, Brent's variant of the rho method, p-1, and elliptic curves enough
 // for prime factors of about 25 digits. What is left composite is the
 // cofactor.
-func Factor(w *algebra.Work, n *big.Int) Factorization { return factor(w, n, 1) }
+func Factor(w *algebra.Work, n *big.Int) Factorization { return factor(w, n, 1, nil) }
 
 // factor is Factor for numbers whose prime factors are 1 modulo step, apart
-// from those found by trial division.
-func factor(w *algebra.Work, n *big.Int, step int) Factorization {
+// from those found by trial division; the known primes are tried first.
+func factor(w *algebra.Work, n *big.Int, step int, known []*big.Int) Factorization {
 	c := &collector{w: w, step: step, count: map[string]*PrimePower{}}
 	m := c.trial(new(big.Int).Set(n))
+	for _, p := range known {
+		c.take(m, p)
+	}
 	c.split(m, 1)
 	return c.result()
 }
@@ -103,27 +104,51 @@ func (c *collector) result() Factorization {
 // trial takes out the primes below 2^12 and returns the rest; when all prime
 // factors are 1 modulo step, also those below 2^12 step.
 func (c *collector) trial(n *big.Int) *big.Int {
-	q, r, d := new(big.Int), new(big.Int), new(big.Int)
-	take := func(p int64) {
-		for d.SetInt64(p); ; {
-			if q.QuoRem(n, d, r); r.Sign() != 0 {
-				return
-			}
-			c.add(d, 1)
-			n.Set(q)
+	d := new(big.Int)
+	for _, p := range smallPrimes {
+		if n.IsUint64() {
+			return n.SetUint64(c.trial64(n.Uint64()))
 		}
-	}
-	for _, p := range PrimesUpTo(1 << 12) {
-		take(int64(p))
+		c.take(n, d.SetInt64(int64(p)))
 	}
 	if c.step > 2 {
 		for k := int64(1); k <= 1<<12 && n.Cmp(one) > 0; k++ {
 			if p := k*int64(c.step) + 1; isPrime64(uint64(p)) {
-				take(p)
+				c.take(n, d.SetInt64(p))
 			}
 		}
 	}
 	return n
+}
+
+// trial64 is trial without the step, in machine words.
+func (c *collector) trial64(n uint64) uint64 {
+	for _, p := range smallPrimes {
+		q := uint64(p)
+		if q*q > n {
+			break // n is 1 or a prime
+		}
+		e := 0
+		for ; n%q == 0; n /= q {
+			e++
+		}
+		if e > 0 {
+			c.add(big.NewInt(int64(p)), e)
+		}
+	}
+	return n
+}
+
+// take divides n by the prime p as often as it goes.
+func (c *collector) take(n, p *big.Int) {
+	q, r := new(big.Int), new(big.Int)
+	for {
+		if q.QuoRem(n, p, r); r.Sign() != 0 {
+			return
+		}
+		c.add(p, 1)
+		n.Set(q)
+	}
 }
 
 // split factors n^e, where n has no small prime factors.
@@ -170,7 +195,10 @@ func (c *collector) divisor(n *big.Int) *big.Int {
 	if d := rho(c.w, n, c.step, 1<<15); d != nil {
 		return d
 	}
-	return ecm(c.w, n, c.step)
+	if d := pMinus1(c.w, n, c.step); d != nil {
+		return d
+	}
+	return ecm(c.w, n)
 }
 
 // rho64 is a proper divisor of a composite n below 2^62 without small prime

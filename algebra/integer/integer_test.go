@@ -177,6 +177,98 @@ func TestSmall(t *testing.T) {
 	}
 }
 
+// All pairs of congruences modulo small numbers, against a search.
+func TestCRT(t *testing.T) {
+	for m := int64(1); m <= 12; m++ {
+		for n := int64(1); n <= 12; n++ {
+			for a := range m {
+				for b := range n {
+					x, l, err := CRT([]*big.Int{big.NewInt(a), big.NewInt(b)}, []*big.Int{big.NewInt(m), big.NewInt(n)})
+					want := int64(-1)
+					for k := m*n - 1; k >= 0; k-- {
+						if k%m == a && k%n == b {
+							want = k
+						}
+					}
+					lcm := m * n / int64(gcd64(uint64(m), uint64(n)))
+					if (err == nil) != (want >= 0) || err == nil && (x.Int64() != want || l.Int64() != lcm) {
+						t.Fatalf("%d mod %d and %d mod %d: %v %v %v, want %d", a, m, b, n, x, l, err, want)
+					}
+				}
+			}
+		}
+	}
+}
+
+func TestPerfectPower(t *testing.T) {
+	for n := int64(2); n < 2000; n++ {
+		want := 1
+		for b := int64(2); b*b <= n; b++ {
+			k, q := 1, b
+			for ; q < n; k++ {
+				q *= b
+			}
+			if q == n {
+				want = max(want, k)
+			}
+		}
+		root, k := PerfectPower(big.NewInt(n))
+		if k != want || new(big.Int).Exp(root, big.NewInt(int64(k)), nil).Int64() != n {
+			t.Fatalf("%d is %v^%d, want exponent %d", n, root, k, want)
+		}
+	}
+}
+
+// What is said of composites is true of them: Fermat's test, and square roots
+// of 1. Among them are the strong pseudoprimes to the base 2 below 30000 (C.
+// Pomerance, J. Selfridge, S. Wagstaff, The pseudoprimes to 25 10^9, 1980) and
+// the Carmichael numbers below 10000 (R. Carmichael, 1910).
+func TestWitness(t *testing.T) {
+	w := algebra.NewWork(nil)
+	list := []string{"2047", "3277", "4033", "4681", "8321", "15841", "29341", "561", "1105", "1729", "2465", "2821", "6601", "8911",
+		"3825123056546413051", "318665857834031151167461", "1000036000099", "0x10000000000000000000000000000000000000000000000000000000000000001"}
+	for _, s := range list {
+		n := number(s)
+		if IsPrime(w, n).Holds {
+			t.Errorf("%v is composite", n)
+		}
+		v := witness(n)
+		if v.Holds || len(v.Evidence.Witness) != 1 {
+			t.Fatalf("%v: %+v", n, v)
+		}
+		x := v.Evidence.Witness[0].Value.(*big.Int)
+		if v.Evidence.Witness[0].Name == "square root of 1 mod n" {
+			y := new(big.Int).Mul(x, x)
+			if y.Mod(y, n).Cmp(one) != 0 || x.Cmp(one) == 0 || new(big.Int).Add(x, one).Cmp(n) == 0 {
+				t.Errorf("%v is no witness against %v", x, n)
+			}
+		} else if x.Cmp(one) == 0 {
+			t.Errorf("%v: Fermat's test passes", n)
+		}
+	}
+}
+
+func TestPMinus1(t *testing.T) {
+	w := algebra.NewWork(nil)
+	// 2^67 - 1: 193707721 - 1 = 2^3 3^3 5 67 2677 (F. Cole, 1903).
+	n := new(big.Int).Lsh(one, 67)
+	n.Sub(n, one)
+	if d := pMinus1(w, n, 1); d == nil || d.String() != "193707721" {
+		t.Errorf("p-1 finds %v in 2^67 - 1", d)
+	}
+	// A prime r with r-1 = 2 * 1000003 * k, k small: only the second stage.
+	r := new(big.Int)
+	for k := int64(1); ; k++ {
+		if r.SetInt64(2000006*k + 1); r.ProbablyPrime(0) {
+			break
+		}
+	}
+	m := new(big.Int).Mul(r, number("170141183460469231731687303715884105727"))
+	if d := pMinus1(w, m, 1); d == nil || d.Cmp(r) != 0 {
+		t.Errorf("the second stage of p-1 finds %v, want %v", d, r)
+	}
+}
+
 func TestRoot(t *testing.T) {
 	r := rand.New(rand.NewPCG(5, 5))
 	for range 500 {

@@ -11,8 +11,8 @@ import (
 // References:
 //
 //	[BLSTW] J. Brillhart, D. Lehmer, J. Selfridge, B. Tuckerman, S. Wagstaff,
-//	  Factorizations of b^n +- 1, 3rd edition 2002: cyclotomic values, the
-//	  intrinsic prime, and the Aurifeuillian factorizations.
+//	  Factorizations of b^n +- 1, 3rd edition 2002: cyclotomic values and the
+//	  intrinsic prime.
 
 type powerKey struct {
 	p string
@@ -26,7 +26,8 @@ var powers struct {
 
 // FactorPower factors p^n - 1 for a prime p and n >= 1: it is the product of
 // the values Phi_d(p) over d | n. The prime factors of Phi_d(p) are 1 modulo
-// d, apart from at most one, the largest prime of d. Results are remembered.
+// d, apart from at most one, the largest prime of d. Results are remembered, so
+// nobody changes them.
 func FactorPower(w *algebra.Work, p *big.Int, n int) Factorization {
 	key := powerKey{p.String(), n}
 	powers.Lock()
@@ -63,7 +64,7 @@ func factorCyclotomic(w *algebra.Work, p *big.Int, d int) Factorization {
 	n := CyclotomicValue(d, p)
 	all := &collector{w: w, count: map[string]*PrimePower{}}
 	for _, part := range aurifeuillian(n, p, d) {
-		f := factor(w, part, d)
+		f := factor(w, part, d, hints(p, d))
 		for _, q := range f.Primes {
 			all.add(q.P, q.E)
 		}
@@ -75,44 +76,6 @@ func factorCyclotomic(w *algebra.Work, p *big.Int, d int) Factorization {
 		}
 	}
 	return all.result()
-}
-
-// aurifeuillian splits n = Phi_d(p) where an identity does [BLSTW, III C 2]:
-//
-//	2^(2h) + 1 = (2^h - 2^k + 1)(2^h + 2^k + 1),           h = 2k-1
-//	3^(3h) + 1 = (3^h + 1)(3^h - 3^k + 1)(3^h + 3^k + 1)
-//	5^(5h) - 1 = (5^h - 1) L M,  L, M = 5^(2h) + 3 5^h + 1 -+ 5^k (5^h + 1)
-func aurifeuillian(n, p *big.Int, d int) []*big.Int {
-	if !p.IsInt64() {
-		return []*big.Int{n}
-	}
-	b := p.Int64()
-	var h int
-	switch {
-	case b == 2 && d%8 == 4:
-		h = d / 4
-	case b == 3 && d%12 == 6:
-		h = d / 6
-	case b == 5 && d%10 == 5:
-		h = d / 5
-	default:
-		return []*big.Int{n}
-	}
-	ph := new(big.Int).Exp(p, big.NewInt(int64(h)), nil)
-	pk := new(big.Int).Exp(p, big.NewInt(int64((h+1)/2)), nil)
-	l := new(big.Int).Add(ph, one)
-	if b == 5 {
-		pk.Mul(pk, l)
-		l.Mul(ph, ph)
-		l.Add(l, new(big.Int).Mul(big.NewInt(3), ph))
-		l.Add(l, one)
-	}
-	l.Sub(l, pk)
-	g := new(big.Int).GCD(nil, nil, l, n)
-	if g.Cmp(one) == 0 || g.Cmp(n) == 0 {
-		return []*big.Int{n}
-	}
-	return []*big.Int{g, new(big.Int).Div(n, g)}
 }
 
 // CyclotomicValue is Phi_d(x), for x >= 2: the product of (x^(d/e) - 1)^mu(e)

@@ -1,6 +1,7 @@
 package integer
 
 import (
+	"fmt"
 	"math/big"
 	"math/bits"
 
@@ -40,12 +41,10 @@ func IsPrime(w *algebra.Work, n *big.Int) algebra.Verdict {
 	}
 	const source = "R. Baillie, S. Wagstaff, Lucas pseudoprimes, 1980"
 	if !n.ProbablyPrime(0) {
-		v := algebra.Because(false, "it fails a test that every prime passes")
-		if !fermat(n) {
-			v = algebra.Because(false, "2^(n-1) is not 1 modulo n")
-			v.Evidence = v.Evidence.With("2^(n-1) mod n", new(big.Int).Exp(two, new(big.Int).Sub(n, one), n))
+		v := witness(n)
+		if v.Evidence.Source == "" {
+			v.Evidence.Source = source
 		}
-		v.Evidence.Source = source
 		return v
 	}
 	if n.IsUint64() {
@@ -60,14 +59,50 @@ func IsPrime(w *algebra.Work, n *big.Int) algebra.Verdict {
 	}}
 }
 
-func fermat(n *big.Int) bool {
-	return new(big.Int).Exp(two, new(big.Int).Sub(n, one), n).Cmp(one) == 0
+// witness is why a composite n is not prime: a base a for which n fails the
+// strong test (G. Miller, 1976; M. Rabin, 1980), which shows itself either in
+// a^(n-1) or in a square root of 1.
+func witness(n *big.Int) algebra.Verdict {
+	minus := new(big.Int).Sub(n, one)
+	s := minus.TrailingZeroBits()
+	odd := new(big.Int).Rsh(minus, s)
+	for _, p := range PrimesUpTo(50) {
+		a := big.NewInt(int64(p))
+		x := new(big.Int).Exp(a, odd, n)
+		root := new(big.Int)
+		for range s {
+			if x.Cmp(one) == 0 {
+				break
+			}
+			root.Set(x)
+			x.Mul(x, x).Mod(x, n)
+		}
+		switch {
+		case x.Cmp(one) != 0:
+			v := algebra.Because(false, "%d^(n-1) is not 1 modulo n", p)
+			v.Evidence = v.Evidence.With(fmt.Sprintf("%d^(n-1) mod n", p), x)
+			v.Evidence.Source = "P. de Fermat, 1640"
+			return v
+		case root.Sign() != 0 && root.Cmp(minus) != 0:
+			v := algebra.Because(false, "1 has a square root modulo n other than 1 and -1")
+			v.Evidence = v.Evidence.With("square root of 1 mod n", root)
+			v.Evidence.Source = "M. Rabin, Probabilistic algorithm for testing primality, 1980"
+			return v
+		}
+	}
+	return algebra.Because(false, "it fails a test that every prime passes")
 }
+
+// smallPrimes are those of trial division.
+var smallPrimes = PrimesUpTo(1 << 12)
 
 // smallDivisor is the least prime below 1000 that divides n, or 0.
 func smallDivisor(n *big.Int) int64 {
 	var m big.Int
-	for _, p := range PrimesUpTo(1000) {
+	for _, p := range smallPrimes {
+		if p > 1000 {
+			break
+		}
 		if m.Mod(n, big.NewInt(int64(p))).Sign() == 0 {
 			return int64(p)
 		}

@@ -75,6 +75,34 @@ func InverseMod(a, m *big.Int) (*big.Int, error) {
 	return x.Mod(x, m), nil
 }
 
+// CRT is the x with 0 <= x < m and x = residues[i] modulo moduli[i] for all i,
+// and m, the least common multiple of the moduli, which are positive. It is an
+// error of kind Undefined when two of the congruences contradict each other.
+func CRT(residues, moduli []*big.Int) (x, m *big.Int, err error) {
+	x, m = new(big.Int), big.NewInt(1)
+	u, t := new(big.Int), new(big.Int)
+	for i, n := range moduli {
+		// x + m k = residue modulo n.
+		g := new(big.Int).GCD(u, nil, t.Mod(m, n), n)
+		d := new(big.Int).Sub(residues[i], x)
+		if d.QuoRem(d, g, t); t.Sign() != 0 {
+			return nil, nil, algebra.Errorf(algebra.Undefined,
+				"no integer is %v modulo %v and %v modulo %v: they differ modulo %v", x, m, residues[i], n, g)
+		}
+		step := new(big.Int).Div(n, g)
+		d.Mul(d, u).Mod(d, step)
+		x.Add(x, d.Mul(d, m))
+		m.Mul(m, step)
+	}
+	return x, m, nil
+}
+
+// PerfectPower writes n >= 2 as root^k with the largest k.
+func PerfectPower(n *big.Int) (root *big.Int, k int) {
+	root, k = perfectPower(n)
+	return new(big.Int).Set(root), k
+}
+
 // OrderMod is the multiplicative order of a modulo m >= 1.
 func OrderMod(w *algebra.Work, a, m *big.Int) (*big.Int, error) {
 	if g := new(big.Int).GCD(nil, nil, new(big.Int).Mod(a, m), m); g.Cmp(one) != 0 && m.Cmp(one) != 0 {
