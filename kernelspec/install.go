@@ -40,7 +40,8 @@ func (t Target) Dir() (string, error) {
 	return t.System.kernels(t.Data, t.Name), nil
 }
 
-// Install writes the kernelspec and returns its folder. Changed is false when
+// Install writes the kernelspec, and what colours cells, and returns the
+// kernelspec's folder. Changed is false when
 // everything was in place already.
 func (i Installation) Install() (dir string, changed bool, err error) {
 	if dir, err = i.Dir(); err != nil {
@@ -53,8 +54,11 @@ func (i Installation) Install() (dir string, changed bool, err error) {
 	if err != nil {
 		return dir, false, err
 	}
+	if changed, err = i.installExtension(); err != nil {
+		return dir, changed, err
+	}
 	if err := os.MkdirAll(dir, 0o755); err != nil {
-		return dir, false, err
+		return dir, changed, err
 	}
 	for _, f := range files {
 		c, err := f.write(dir)
@@ -135,7 +139,8 @@ func (f file) write(dir string) (changed bool, err error) {
 	return true, os.Rename(t.Name(), path)
 }
 
-// Uninstall removes the kernelspec; found is false when there was none.
+// Uninstall removes what Install has written; found is false when there was
+// nothing.
 func (t Target) Uninstall() (dir string, found bool, err error) {
 	if dir, err = t.Dir(); err != nil {
 		return "", false, err
@@ -149,7 +154,10 @@ func (t Target) Uninstall() (dir string, found bool, err error) {
 	case !spec.Ours():
 		return dir, true, fmt.Errorf("%s belongs to another kernel, %q, and is left alone", dir, spec.DisplayName)
 	}
-	return dir, true, os.RemoveAll(dir)
+	if err := os.RemoveAll(dir); err != nil {
+		return dir, true, err
+	}
+	return dir, true, t.uninstallExtension()
 }
 
 // Read reads the kernel.json in dir.

@@ -12,6 +12,7 @@ import (
 	"testing"
 
 	"adjoin/kernelspec/mark"
+	"adjoin/lang"
 )
 
 var update = flag.Bool("update", false, "draw the logos anew")
@@ -152,6 +153,78 @@ func TestInstallIsIdempotent(t *testing.T) {
 	}
 	if _, err := os.Stat(dir); !os.IsNotExist(err) {
 		t.Error("the folder is still there")
+	}
+}
+
+func TestExtensionStaysWhileItIsNeeded(t *testing.T) {
+	one := lasting(t)
+	two := one
+	two.Name = "two"
+	for _, i := range []Installation{one, two} {
+		if _, _, err := i.Install(); err != nil {
+			t.Fatal(err)
+		}
+	}
+	script := filepath.Join(one.Data, "labextensions", "adjoin-notation", "static", "remoteEntry.js")
+	for _, c := range []struct {
+		i    Installation
+		left bool
+	}{{one, true}, {two, false}} {
+		if _, _, err := c.i.Uninstall(); err != nil {
+			t.Fatal(err)
+		}
+		if _, err := os.Stat(script); (err == nil) != c.left {
+			t.Errorf("after removing %q: %v", c.i.Name, err)
+		}
+	}
+}
+
+// The words that the extension colours are those that the grammar reserves.
+func TestExtensionKnowsTheKeywords(t *testing.T) {
+	b, err := extensionFiles.ReadFile("files/labextension/static/remoteEntry.js")
+	if err != nil {
+		t.Fatal(err)
+	}
+	_, list, ok := strings.Cut(string(b), "KEYWORDS = /^(?:")
+	list, _, ok2 := strings.Cut(list, ")")
+	if !ok || !ok2 {
+		t.Fatal("there is no list of keywords")
+	}
+	for word := range strings.SplitSeq(list, "|") {
+		if k := lang.Tokens(word); len(k) != 1 || k[0].Kind != lang.KindKeyword {
+			t.Errorf("%s is no keyword", word)
+		}
+	}
+	// The language's own list, as its reference has it.
+	for word := range strings.FieldsSeq("let where for in of over by to at from with as is not and or if then else claim mod divides") {
+		if !strings.Contains("|"+list+"|", "|"+word+"|") {
+			t.Errorf("%s is missing", word)
+		}
+	}
+}
+
+// Source of the keys: JupyterLab documentation 4, "Distributing a prebuilt
+// extension": the server reads name, version and jupyterlab._build.load and
+// .extension.
+func TestExtensionPackage(t *testing.T) {
+	b, err := extensionFiles.ReadFile("files/labextension/package.json")
+	if err != nil {
+		t.Fatal(err)
+	}
+	var p struct {
+		Name, Version string
+		JupyterLab    struct {
+			Build struct{ Load, Extension string } `json:"_build"`
+		}
+	}
+	if err := json.Unmarshal(b, &p); err != nil {
+		t.Fatal(err)
+	}
+	if p.Name != extensionName || p.Version == "" || p.JupyterLab.Build.Load != "static/remoteEntry.js" || p.JupyterLab.Build.Extension != "./extension" {
+		t.Errorf("%+v", p)
+	}
+	if _, err := extensionFiles.ReadFile("files/labextension/" + p.JupyterLab.Build.Load); err != nil {
+		t.Error(err)
 	}
 }
 
