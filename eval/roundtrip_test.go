@@ -19,7 +19,7 @@ var parsesBack = []string{
 	"x^4 + x + 1 over F_2", "(x^2 + a*x + 1)*x", "x^2 + 1 over K", "x^3 + c*x + a*c", "5 over F_7[x]", "x^2 + x over F_256",
 	"[x over F_2, x + 1 over F_2]", "[x over F_2, a*x]", "{x over F_3}", "(x over F_2, x over F_3)",
 	"Frobenius of K/F_2", "(Frobenius of F_256/F_2)^3", "embedding from F_4 to K", "automorphisms of K", "automorphisms of F_16",
-	"(Frobenius of L/F_2) * (embedding from K to L)", "embeddings of F_4 in F_16",
+	"(Frobenius of L/F_2) * (embedding from K to L)", "embeddings of F_4 in F_16", "isomorphisms from K to F_256", "isomorphism from F_256 to K", "embeddings of N in F_{3^8}", "automorphisms of L/F_2",
 	"Gal(K/F_2)", "subgroups of Gal(K/F_2)", "Gal(L/K)",
 	"factorization of 360", "factorization of -360", "factorization of x^15 - 1 over F_2", "factorization of 2*x^4 - 2 over F_7",
 	"matrix of [[1, 2], [3, 4]]", "matrix of [[1, a], [0, a^2]]", "(matrix of [[1, 2], [3, 4]]) over F_7",

@@ -3,6 +3,7 @@ package value
 import (
 	"fmt"
 	"math/big"
+	"strings"
 
 	"adjoin/algebra"
 	"adjoin/algebra/field"
@@ -27,8 +28,13 @@ func (s Map) Text(p *Printer) string { return withRing(p, s) }
 
 func (s Map) overText(p *Printer) (bare, ring string) {
 	K, L := s.M.From(), s.M.To()
-	if named(K) && s.isEndomorphism() && s.fixesBase() {
-		return "(" + K.Name() + " |-> " + elementText(p, s.M.Image()) + ")", operandName(p, K)
+	if s.isEndomorphism() { // under the name that the target has for its generator
+		K = L
+	}
+	// The image says where the map goes when it shows the generator of L.
+	image := elementText(p, s.M.Image())
+	if named(K) && s.fixesBase() && (s.isEndomorphism() || strings.Contains(image, generatorText(L))) {
+		return "(" + K.Name() + " |-> " + image + ")", operandName(p, K)
 	}
 	if s.isEndomorphism() {
 		return powerOfFrobenius(p, L, s.exponent()), ""
@@ -50,9 +56,9 @@ func powerOfFrobenius(p *Printer, L *field.Field, k int) string {
 // exponent is the k with s(x) = x^(p^k), 0 <= k < n, for an automorphism.
 func (s Map) exponent() int { return s.twist() }
 
-// fixesBase says whether an automorphism fixes the field that its own was made
-// over, so that the image of the generator tells everything.
-func (s Map) fixesBase() bool { return s.exponent()%s.M.From().Base().AbsoluteDegree() == 0 }
+// fixesBase says whether the map follows the fixed embedding on the field that
+// its own was made over, so that the image of the generator tells everything.
+func (s Map) fixesBase() bool { return s.twist()%s.M.From().Base().AbsoluteDegree() == 0 }
 
 // twist is the k with s = (x |-> x^(p^k)) * (fixed embedding).
 func (s Map) twist() int {
@@ -237,13 +243,12 @@ func mapByImage(c *Context, f Function, K *field.Field) (Value, error) {
 	return Map{m}, nil
 }
 
-func equalMaps(_ *Context, a, b Map) (algebra.Verdict, error) {
+func equalMaps(c *Context, a, b Map) (algebra.Verdict, error) {
 	if !field.Same(a.M.From(), b.M.From()) || !field.Same(a.M.To(), b.M.To()) {
 		return algebra.Verdict{}, algebra.Errorf(algebra.Mismatch, "maps between different fields are not compared")
 	}
-	w := algebra.NewWork(nil)
-	for _, g := range towerGenerators(w, a.M.From()) {
-		if x, y := a.M.Apply(w, g), b.M.Apply(w, g); !x.Equal(y) {
+	for _, g := range towerGenerators(c.W, a.M.From()) {
+		if x, y := a.M.Apply(c.W, g), b.M.Apply(c.W, g); !x.Equal(y) {
 			return algebra.Because(false, "they send %s to %s and to %s", Element{g}.Text(nil), Element{x}.Text(nil), Element{y}.Text(nil)), nil
 		}
 	}

@@ -135,7 +135,7 @@ var collections = []Entry{
 	},
 	{
 		Words: "matrix", Class: Noun, Topic: "collections",
-		Meaning: "the matrix with the given rows; of a map of L/K in a basis B: its columns are the coordinates of the images",
+		Meaning: "the matrix with the given rows; of a map in a basis, or from one basis to another: column j has the coordinates of the image of the j-th element",
 		Cases: []Case{
 			{Args: []Arg{{Prep: "of", Kind: Rows}}, Do: func(c *value.Context, a []value.Value) (value.Value, error) {
 				var rows [][]value.Value
@@ -144,7 +144,12 @@ var collections = []Entry{
 				}
 				return value.NewMatrix(c, rows)
 			}},
-			{Args: []Arg{{Prep: "of", Kind: Function}, {Prep: "in", Kind: Basis}, {Prep: "over", Kind: Field, Optional: true}}, Do: matrixOfMap},
+			{Args: []Arg{{Prep: "of", Kind: Function}, {Prep: "in", Kind: Basis}, {Prep: "over", Kind: Field, Optional: true}}, Do: func(c *value.Context, a []value.Value) (value.Value, error) {
+				return matrixOfMap(c, a[0].(value.Callable), a[1].(value.List), a[1].(value.List), a[2])
+			}},
+			{Args: []Arg{{Prep: "of", Kind: Function}, {Prep: "from", Kind: Basis}, {Prep: "to", Kind: Basis}, {Prep: "over", Kind: Field, Optional: true}}, Do: func(c *value.Context, a []value.Value) (value.Value, error) {
+				return matrixOfMap(c, a[0].(value.Callable), a[1].(value.List), a[2].(value.List), a[3])
+			}},
 		},
 		Examples: []Example{
 			{"(matrix of [[1, 1], [1, 0]])^10", "matrix of [[89, 55], [55, 34]]"},
@@ -199,23 +204,22 @@ func randomMember(c *value.Context, l value.Collection) (value.Value, error) {
 	return items[k.Int64()], nil
 }
 
-// matrixOfMap has the coordinates of the image of the j-th element of the
-// basis in its j-th column.
-func matrixOfMap(c *value.Context, a []value.Value) (value.Value, error) {
-	f, list := a[0].(value.Callable), a[1].(value.List)
-	images := make([]value.Value, len(list.Items))
-	for j, x := range list.Items {
+// matrixOfMap has in its j-th column the coordinates, in the basis to, of the
+// image of the j-th element of the basis from.
+func matrixOfMap(c *value.Context, f value.Callable, from, to value.List, over value.Value) (value.Value, error) {
+	images := make([]value.Value, len(from.Items))
+	for j, x := range from.Items {
 		y, err := f.Call(c, []value.Value{x})
 		if err != nil {
 			return nil, err
 		}
 		images[j] = y
 	}
-	b, err := basisFor(c, images, list, a[2])
+	b, err := basisFor(c, images, to, over)
 	if err != nil {
 		return nil, err
 	}
-	rows := make([][]value.Value, len(images))
+	rows := make([][]value.Value, len(to.Items))
 	for _, y := range images {
 		column, err := coordinates(c, b, y)
 		if err != nil {

@@ -152,7 +152,7 @@ func embeddings(c *value.Context, a []value.Value) (value.Value, error) {
 		return nil, err
 	}
 	items := make([]value.Value, len(list))
-	n := &value.Notes{Caption: "Homomorphisms from " + K.Text(nil) + " to " + L.Text(nil), Heads: []string{"number", "image of the generator"}}
+	n := &value.Notes{Caption: "Homomorphisms from " + value.RingName(c.Printer(), K) + " to " + value.RingName(c.Printer(), L), Heads: []string{"number", "image of the generator"}}
 	for i, m := range list {
 		items[i] = value.Map{M: m}
 		n.Rows = append(n.Rows, []value.Value{value.Int(i + 1), value.Element{E: m.Image()}})

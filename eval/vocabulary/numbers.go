@@ -120,7 +120,7 @@ var numbers = []Entry{
 	},
 	{
 		Words: "inverse", Class: Noun, Topic: "numbers",
-		Meaning: "what gives 1 when multiplied: of a number, of an integer in Z/n, of a matrix, of an automorphism",
+		Meaning: "what gives 1 when multiplied: of a number, of an integer in Z/n, of a matrix; the map that undoes an isomorphism",
 		Cases: []Case{
 			{Args: []Arg{{Prep: "of", Kind: Number}, {Prep: "in", Kind: AnyRing, Optional: true}}, Do: func(c *value.Context, a []value.Value) (value.Value, error) {
 				x := a[0]
@@ -133,7 +133,11 @@ var numbers = []Entry{
 				return value.Divide(c, value.Int(1), x)
 			}},
 			{Args: []Arg{{Prep: "of", Kind: Map}}, Do: func(c *value.Context, a []value.Value) (value.Value, error) {
-				return value.Operate(c, "^", a[0], value.Int(-1))
+				m, err := a[0].(value.Map).M.Inverse(c.W)
+				if err != nil {
+					return nil, err
+				}
+				return value.Map{M: m}, nil
 			}},
 			{Args: []Arg{{Prep: "of", Kind: Matrix}}, Over: true, Do: func(c *value.Context, a []value.Value) (value.Value, error) {
 				return a[0].(value.Matrix).Inverse(c)
