@@ -96,12 +96,12 @@ func systemPython() (string, error) {
 			last = err
 			continue
 		}
-		const check = "import sys, venv, ensurepip; sys.exit(sys.version_info < (3, 10) and 'older than 3.10')"
+		const check = "import sys, venv, ensurepip; sys.exit(sys.version_info < (3, 11) and 'older than 3.11')"
 		if out, err := exec.Command(path, "-c", check).CombinedOutput(); err != nil {
 			last = fmt.Errorf("%s: %w: %s", name, err, out)
 			continue
 		}
 		return path, nil
 	}
-	return "", fmt.Errorf("no Python 3.10 or later that can make environments: %w", last)
+	return "", fmt.Errorf("no Python 3.11 or later that can make environments: %w", last)
 }
