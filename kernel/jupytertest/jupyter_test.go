@@ -6,6 +6,7 @@ package jupytertest
 import (
 	"bytes"
 	"context"
+	"encoding/json"
 	"fmt"
 	"io"
 	"net"
@@ -13,6 +14,7 @@ import (
 	"os"
 	"os/exec"
 	"path/filepath"
+	"syscall"
 	"testing"
 	"time"
 
@@ -29,8 +31,6 @@ type room struct {
 func build(t *testing.T) room {
 	t.Helper()
 	r := room{python: outside.Python(t, "requirements.txt"), dir: t.TempDir()}
-	// A home that is not below a folder for temporary files, which install
-	// refuses, would touch the user; so the copy beside the kernelspec is used.
 	program := filepath.Join(r.dir, "adjoin")
 	if out, err := exec.Command("go", "build", "-o", program, "../cmd/adjoin").CombinedOutput(); err != nil {
 		t.Fatalf("%v\n%s", err, out)
@@ -44,13 +44,10 @@ func build(t *testing.T) room {
 		"ADJOIN_HISTORY="+filepath.Join(r.dir, "history"),
 		"PYTHONWARNINGS=ignore",
 	)
-	spec := filepath.Join(r.dir, "share", "jupyter", "kernels", "adjoin")
-	if err := os.MkdirAll(spec, 0o755); err != nil {
-		t.Fatal(err)
-	}
-	kernel := fmt.Sprintf(`{"argv": [%q, "kernel", "--connection-file", "{connection_file}"], "display_name": "Adjoin", "language": "adjoin", "interrupt_mode": "message"}`, program)
-	if err := os.WriteFile(filepath.Join(spec, "kernel.json"), []byte(kernel), 0o644); err != nil {
-		t.Fatal(err)
+	install := exec.Command(program, "install", "--copy", "--prefix", r.dir)
+	install.Env = r.env
+	if out, err := install.CombinedOutput(); err != nil {
+		t.Fatalf("install: %v\n%s", err, out)
 	}
 	return r
 }
@@ -117,7 +114,23 @@ func TestDemosInNbclientAndNbconvert(t *testing.T) {
 func TestDemosInJupyterLab(t *testing.T) {
 	r := build(t)
 	chromium := outside.Program(t, "chromium", "chromium-browser", "google-chrome")
-	_, names := r.demos(t)
+	paths, names := r.demos(t)
+	for _, path := range paths {
+		strip(t, path)
+	}
+	// All cells in the page at once, and no questions about news.
+	for name, text := range map[string]string{
+		"notebook-extension/tracker":      `{"windowingMode": "none"}`,
+		"apputils-extension/notification": `{"fetchNews": "false", "checkForUpdates": false}`,
+	} {
+		file := filepath.Join(r.dir, "config", "lab", "user-settings", "@jupyterlab", name+".jupyterlab-settings")
+		if err := os.MkdirAll(filepath.Dir(file), 0o755); err != nil {
+			t.Fatal(err)
+		}
+		if err := os.WriteFile(file, []byte(text), 0o644); err != nil {
+			t.Fatal(err)
+		}
+	}
 	port, token := freePort(t), "adjoin"
 	server := exec.Command(r.python, "-m", "jupyterlab", "--no-browser", "--allow-root", "--ip=127.0.0.1",
 		fmt.Sprintf("--port=%d", port), "--ServerApp.port_retries=0", "--IdentityProvider.token="+token,
@@ -130,16 +143,40 @@ func TestDemosInJupyterLab(t *testing.T) {
 		t.Fatal(err)
 	}
 	defer func() {
-		server.Process.Signal(os.Interrupt)
-		time.AfterFunc(5*time.Second, func() { server.Process.Kill() })
-		server.Process.Signal(os.Interrupt)
+		server.Process.Signal(syscall.SIGTERM)
+		kill := time.AfterFunc(10*time.Second, func() { server.Process.Kill() })
 		server.Wait()
+		kill.Stop()
 		if t.Failed() {
 			t.Logf("server log:\n%s", log.Bytes())
 		}
 	}()
 	waitFor(t, fmt.Sprintf("http://127.0.0.1:%d/api/status?token=%s", port, token))
 	r.run(t, append([]string{"browser.py", chromium, fmt.Sprint(port), token, artifacts(t)}, names...)...)
+}
+
+// strip takes the outputs from a notebook, so that what the page shows is new.
+func strip(t *testing.T, path string) {
+	t.Helper()
+	text, err := os.ReadFile(path)
+	if err != nil {
+		t.Fatal(err)
+	}
+	var notebook map[string]any
+	if err := json.Unmarshal(text, &notebook); err != nil {
+		t.Fatal(err)
+	}
+	for _, cell := range notebook["cells"].([]any) {
+		if c := cell.(map[string]any); c["cell_type"] == "code" {
+			c["outputs"], c["execution_count"] = []any{}, nil
+		}
+	}
+	if text, err = json.Marshal(notebook); err != nil {
+		t.Fatal(err)
+	}
+	if err := os.WriteFile(path, text, 0o644); err != nil {
+		t.Fatal(err)
+	}
 }
 
 func freePort(t *testing.T) int {
