@@ -379,6 +379,11 @@ func (c *cell) comprehension(x *lang.Comprehension) (value.Value, error) {
 		if !ok {
 			return blame(clause.In, algebra.Invalid, "%s has no members to run through", in.Kind())
 		}
+		if x.Where == nil { // every member gives at least one item, or none gives any
+			if err := c.ctx.CheckLength(members.Len()); err != nil {
+				return at(clause.In.Span(), err)
+			}
+		}
 		scope := c.scope
 		for v, err := range members.All(c.ctx) {
 			if err != nil {

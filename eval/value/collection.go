@@ -354,12 +354,15 @@ func (n *Notes) table(p *Printer) display.Table {
 
 func cell(p *Printer, v Value) display.Cell {
 	v = Plain(v)
-	text := v.Text(p)
+	text := itemText(p, v)
 	if o, ok := v.(overRing); ok { // the caption says where they live
 		text, _ = o.overText(p)
 	}
 	if t, ok := v.(Text); ok {
 		return display.Cell{Text: t.S}
+	}
+	if f, ok := v.(Field); ok {
+		return display.Cell{Text: text, TeX: fieldNameTeX(p, f.K)}
 	}
 	return display.Cell{Text: text, TeX: TeX(p, v)}
 }

@@ -96,11 +96,7 @@ var maps = []Entry{
 				return subfieldOfDegree(c, s.M.From(), s.FixedDegree())
 			}},
 			{Args: []Arg{{Prep: "of", Kind: Group}}, Do: func(c *value.Context, a []value.Value) (value.Value, error) {
-				g := a[0].(value.Group)
-				if g.FixedDegree() == g.Of.K.AbsoluteDegree() {
-					return value.Field{K: g.Of.K}, nil
-				}
-				return subfieldOfDegree(c, g.Of.L, g.FixedDegree())
+				return fixedField(c, a[0].(value.Group))
 			}},
 		},
 		Examples: []Example{{"fixed field of (Frobenius of F_{2^12}/F_2)^4", "F_16"}},
@@ -165,16 +161,29 @@ func automorphisms(c *value.Context, g value.Group) (value.Value, error) {
 	if err != nil {
 		return nil, err
 	}
-	n := &value.Notes{Caption: "Automorphisms", Heads: []string{"map", "order", "degree of the fixed field"}}
+	n := &value.Notes{Caption: "Automorphisms", Heads: []string{"map", "order", "fixed field"}}
 	for _, v := range items {
 		s := v.(value.Map)
 		order, err := s.Order()
 		if err != nil {
 			return nil, err
 		}
-		n.Rows = append(n.Rows, []value.Value{s, value.Int(order), value.Int(s.FixedDegree())})
+		fixed, err := subfieldOfDegree(c, s.M.From(), s.FixedDegree())
+		if err != nil {
+			return nil, err
+		}
+		n.Rows = append(n.Rows, []value.Value{s, value.Int(order), fixed})
 	}
 	return value.List{Items: items, Notes: n}, nil
+}
+
+// fixedField is what a group of automorphisms of L/K fixes: K or L as they were
+// given, or the standard field between them.
+func fixedField(c *value.Context, g value.Group) (value.Value, error) {
+	if g.FixedDegree() == g.Of.K.AbsoluteDegree() {
+		return value.Field{K: g.Of.K}, nil
+	}
+	return subfieldOfDegree(c, g.Of.L, g.FixedDegree())
 }
 
 func subfieldOfDegree(c *value.Context, L *field.Field, d int) (value.Value, error) {
