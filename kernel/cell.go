@@ -9,11 +9,14 @@ import (
 	"adjoin/kernel/wire"
 )
 
-// quiet is how long the reply to a failed cell waits. Cells that a client has
-// sent in one go arrive one after another; those that are on their way when an
-// early one fails must still be dropped, and no user asks for a cell so soon
-// after seeing the failure.
-const quiet = 10 * time.Millisecond
+// Cells that a client has sent in one go arrive one after another. Those that
+// are on their way when an early one fails must still be dropped, and no user
+// asks for a cell so soon after seeing the failure: so the reply to a failed
+// cell waits until none has arrived for a while, or for very long.
+const (
+	defaultQuiet = 20 * time.Millisecond
+	maxQuiet     = 25 // times as long
+)
 
 // runCells runs the cells of the queue one after another until it is closed.
 func (s *Server) runCells() {
@@ -74,7 +77,13 @@ func (s *Server) runCell(ctx context.Context, done func(), j *job) {
 // dropBehind drops the cells behind one that has failed, those on their way
 // included.
 func (s *Server) dropBehind(why *Failure) {
-	time.Sleep(quiet)
+	begun := time.Now()
+	for latest := begun; time.Since(latest) < s.quiet && time.Since(begun) < maxQuiet*s.quiet; {
+		time.Sleep(s.quiet - time.Since(latest))
+		if t := s.queue.latest(); t.After(latest) {
+			latest = t
+		}
+	}
 	s.queue.drop(why)
 }
 

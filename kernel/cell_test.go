@@ -113,6 +113,21 @@ func TestFailureDropsWhatWaits(t *testing.T) {
 	}
 }
 
+// A notebook server passes on a long notebook cell by cell.
+func TestFailureDropsWhatIsOnItsWay(t *testing.T) {
+	c := connect(t, onNetwork(t, Connection{IP: "127.0.0.1"}, Options{quiet: 400 * time.Millisecond}), nil)
+	all := sendAll(t, c, code("fail"))
+	for range 10 {
+		time.Sleep(60 * time.Millisecond)
+		all = append(all, sendAll(t, c, code("say late"))...)
+	}
+	for i, p := range all[1:] {
+		if n := finish(t, p).reply.Name; n != "Cancelled" {
+			t.Fatalf("cell %d: %q", i+2, n)
+		}
+	}
+}
+
 func TestFailureThatIsMeantDropsNothing(t *testing.T) {
 	c := connect(t, inMemory(t), nil)
 	all := sendAll(t, c, wire.ExecuteRequest{Code: "fail", StopOnError: ptr(false)}, code("say 2"))
@@ -125,7 +140,11 @@ func TestInterrupt(t *testing.T) {
 	k := inMemory(t)
 	c := connect(t, k, nil)
 	run(t, c, code("let x kept"))
-	for i := range 100 {
+	tries := 100
+	if testing.Short() {
+		tries = 20
+	}
+	for i := range tries {
 		cells := sendAll(t, c, code("say begun\nspin"), code("say 2"))
 		time.Sleep(time.Duration(i%7) * 100 * time.Microsecond) // before the cell has begun, or after
 		over := make(chan struct{})
@@ -191,7 +210,7 @@ func TestInterruptDuringAFlood(t *testing.T) {
 
 func TestFloodIsWholeAndInFewMessages(t *testing.T) {
 	c := connect(t, onNetwork(t, Connection{IP: "127.0.0.1"}, Options{}), nil)
-	const n, size = 100_000, 100
+	const n, size = 30_000, 100
 	begun := time.Now()
 	got := run(t, c, code(fmt.Sprintf("flood %d %d\nresult end", n, size)))
 	took := time.Since(begun)

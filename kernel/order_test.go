@@ -57,14 +57,17 @@ func TestOrderUnderLoad(t *testing.T) {
 		t.Run(fmt.Sprintf("seed %d", seed), func(t *testing.T) {
 			k := inMemory(t)
 			var seen recorder
-			connect(t, k, seen.tap)
+			observer := connect(t, k, seen.tap)
 			var all sync.WaitGroup
 			for i := range uint64(3) {
 				c := connect(t, k, nil)
 				all.Go(func() { misbehave(t, c, rand.New(rand.NewPCG(seed, i))) })
 			}
 			all.Wait()
-			k.close()
+			// When the observer has seen this, it has seen all before it.
+			if err := observer.Ask(limit(t, 30*time.Second), false, "kernel_info_request", struct{}{}, new(wire.Reply)); err != nil {
+				t.Fatal(err)
+			}
 			checkOrder(t, seen.all())
 		})
 	}
@@ -101,8 +104,8 @@ func misbehave(t *testing.T, c *client.Client, r *rand.Rand) {
 		}
 	}
 	stop := make(chan struct{})
-	defer close(stop)
-	go func() { // that cell ends only when it is interrupted
+	var interrupts sync.WaitGroup
+	interrupts.Go(func() { // that cell ends only when it is interrupted
 		for {
 			select {
 			case <-stop:
@@ -113,19 +116,18 @@ func misbehave(t *testing.T, c *client.Client, r *rand.Rand) {
 				}
 			}
 		}
-	}()
-	for _, control := range []bool{false, true} { // all before it is answered by then
-		p, err := c.Send(control, "kernel_info_request", struct{}{})
-		if err != nil {
-			t.Error(err)
-			return
-		}
-		pending = append(pending, p)
-	}
+	})
 	for _, p := range pending {
-		if _, err := p.Wait(limit(t, 20*time.Second), nil); err != nil {
+		if _, err := p.Wait(limit(t, 30*time.Second), nil); err != nil {
 			t.Error(err)
-			return
+			break
+		}
+	}
+	close(stop)
+	interrupts.Wait()
+	for _, control := range []bool{false, true} { // when this is answered, all before it has been
+		if err := c.Ask(limit(t, 30*time.Second), control, "kernel_info_request", struct{}{}, new(wire.Reply)); err != nil {
+			t.Error(err)
 		}
 	}
 }

@@ -4,6 +4,7 @@ import (
 	"context"
 	"errors"
 	"sync"
+	"time"
 
 	"adjoin/kernel/wire"
 )
@@ -16,6 +17,7 @@ type queue struct {
 	cancel  context.CancelCauseFunc // of the cell that runs; nil when none does
 	between bool                    // an interrupt dropped cells when none ran
 	closed  bool
+	arrived time.Time // when the latest cell came
 }
 
 // job is a cell: a request to execute, understood.
@@ -47,6 +49,7 @@ func (q *queue) put(j *job) bool {
 		j.dropped = shutDown
 	}
 	q.jobs = append(q.jobs, j)
+	q.arrived = time.Now()
 	q.wake.Signal()
 	return true
 }
@@ -95,6 +98,13 @@ func (q *queue) interruptedBetween() bool {
 	between := q.between
 	q.between = false
 	return between
+}
+
+// latest is when the latest cell came.
+func (q *queue) latest() time.Time {
+	q.mu.Lock()
+	defer q.mu.Unlock()
+	return q.arrived
 }
 
 // drop drops the cells that wait.

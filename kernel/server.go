@@ -29,6 +29,8 @@ type Options struct {
 	History   *History
 	Transport transport.Options
 	Log       *log.Logger // default: none
+
+	quiet time.Duration // of cells on their way; default defaultQuiet
 }
 
 // Server is a running kernel.
@@ -44,6 +46,7 @@ type Server struct {
 
 	desk  desk
 	queue *queue
+	quiet time.Duration
 	count int // cells counted so far; only the goroutine that runs cells uses it
 
 	iopub                     *transport.Publisher
@@ -67,8 +70,12 @@ func NewServer(l Listeners, o Options) (*Server, error) {
 		log:       o.Log,
 		session:   newID(),
 		queue:     newQueue(),
+		quiet:     o.quiet,
 		cellsDone: make(chan struct{}),
 		stopping:  make(chan struct{}),
+	}
+	if s.quiet == 0 {
+		s.quiet = defaultQuiet
 	}
 	if s.history == nil {
 		s.history = NewHistory("")

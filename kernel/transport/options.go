@@ -11,7 +11,7 @@ import (
 type Options struct {
 	Handshake time.Duration // until a new peer has introduced itself; default 5 s
 	Stall     time.Duration // without a byte read, until a peer counts as gone; default 10 s
-	Patience  time.Duration // that Publisher.Wait gives such a peer; default 1 s
+	Patience  time.Duration // likewise, until Publisher.Wait no longer waits for it; default 1 s
 	Peers     int           // connections at one time; default 256
 	Room      int64         // bytes that wait for one peer when Publisher.Wait begins to wait; default 8 MiB
 	Most      int64         // bytes that wait for one peer when it is given up; default 64 MiB

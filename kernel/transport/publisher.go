@@ -59,9 +59,10 @@ func subscribed(topics map[string]int, topic []byte) bool {
 	return false
 }
 
-// Wait holds up its caller, a source of many broadcasts, while subscribers
-// that still read have much to read. One that has stopped reading is given up
-// after a short time, so that the others get on.
+// Wait holds up its caller, a source of many broadcasts, while subscribers have
+// much to read. It does not wait for one that has taken nothing for a while, so
+// that the others get on; that one is disconnected when too much waits for it,
+// or when it still takes nothing.
 func (p *Publisher) Wait(ctx context.Context) {
 	for p.behind() && ctx.Err() == nil {
 		time.Sleep(2 * time.Millisecond)
@@ -72,20 +73,12 @@ func (p *Publisher) Wait(ctx context.Context) {
 func (p *Publisher) behind() bool {
 	p.order.Lock()
 	defer p.order.Unlock()
-	behind := false
 	for s := range p.topics {
-		size, still := s.out.load()
-		switch {
-		case size <= p.o.Room:
-		case still > p.o.Patience:
-			p.o.logf("a subscriber that has stopped reading is disconnected; %d bytes waited for it", size)
-			s.out.close()
-			delete(p.topics, s)
-		default:
-			behind = true
+		if size, still := s.out.load(); size > p.o.Room && still < p.o.Patience {
+			return true
 		}
 	}
-	return behind
+	return false
 }
 
 func (p *Publisher) serve(s *peer) {

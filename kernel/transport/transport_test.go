@@ -315,7 +315,7 @@ func TestPublisherFilters(t *testing.T) {
 // A subscriber that stops reading must not keep anything from the others, nor
 // may it take memory without end.
 func TestStuckSubscriber(t *testing.T) {
-	p, l := newPublisher(t, Options{Patience: 50 * time.Millisecond, Room: 1 << 20, Most: 4 << 20})
+	p, l := newPublisher(t, Options{Patience: 300 * time.Millisecond, Room: 1 << 20, Most: 24 << 20})
 	stuck := visit(t, l, zmtp.Sub, "")
 	stuck.send("\x01")
 	stuck.receive(t)
