@@ -162,6 +162,9 @@ func Equal(c *Context, a, b Value) (algebra.Verdict, error) {
 }
 
 func equalNumbers(c *Context, a, b number) (algebra.Verdict, error) {
+	if x, y := freeLetter(a), freeLetter(b); x != "" && y != "" && x != y {
+		return algebra.Because(false, "one depends on %s and the other on %s", x, y), nil
+	}
 	x, y, err := meet(c, a, b)
 	if err != nil {
 		return algebra.Verdict{}, err
@@ -183,6 +186,27 @@ func equalNumbers(c *Context, a, b number) (algebra.Verdict, error) {
 		where = "as reduced fractions"
 	}
 	return algebra.Because(same, "compared %s", where), nil
+}
+
+// freeLetter is the letter that a polynomial or fraction depends on, or empty.
+func freeLetter(v number) string {
+	switch v := v.(type) {
+	case Polynomial:
+		if v.P.Degree() > 0 {
+			return v.Letter
+		}
+	case Quotient:
+		return v.Letter
+	case FieldPolynomial:
+		if v.P.Degree() > 0 {
+			return v.Letter
+		}
+	case RationalFunction:
+		if v.height() > 0 {
+			return v.Letter
+		}
+	}
+	return ""
 }
 
 func equalLists(c *Context, a, b Collection) (algebra.Verdict, error) {
@@ -395,8 +419,15 @@ func Division(c *Context, a, b Value) (q, r Value, err error) {
 	return QuotientRemainder(c, y, x)
 }
 
-// Remainder is a mod n.
+// Remainder is a mod n. A fraction has one modulo an integer when its
+// denominator is a unit there.
 func Remainder(c *Context, a, n Value) (Value, error) {
+	if q, ok := operand(a).(Rational); ok {
+		if m, ok := operand(n).(Integer); ok && m.N.Sign() != 0 {
+			r, err := toResidue(c, q, new(big.Int).Abs(m.N))
+			return Integer{r.N}, err
+		}
+	}
 	_, r, err := Division(c, a, n)
 	return r, err
 }

@@ -123,6 +123,9 @@ func NewMatrix(c *Context, rows [][]Value) (Matrix, error) {
 				return Matrix{}, err
 			}
 			m.Rows[i][j] = x
+			if q, ok := x.(Rational); ok {
+				m.Rows[i][j] = NewRational(q.Q)
+			}
 		}
 	}
 	return m, nil

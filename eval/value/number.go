@@ -28,7 +28,7 @@ func (Integer) Kind() string  { return "an integer" }
 func (Rational) Kind() string { return "a rational number" }
 
 func (a Integer) Text(*Printer) string  { return a.N.String() }
-func (a Rational) Text(*Printer) string { return a.Q.String() }
+func (a Rational) Text(*Printer) string { return a.Q.RatString() }
 
 func (a Integer) TeX(*Printer) string { return a.N.String() }
 func (a Rational) TeX(*Printer) string {

@@ -102,6 +102,12 @@ func (u Quotient) equal(b number) bool {
 	return u.Num.Equal(v.Num) && u.Den.Equal(v.Den)
 }
 
+// Derivative is the formal derivative.
+func (u Quotient) Derivative(c *Context) Value {
+	num := u.Num.Derivative().Mul(c.W, u.Den).Sub(u.Num.Mul(c.W, u.Den.Derivative()))
+	return newQuotient(c, num, u.Den.Mul(c.W, u.Den), u.Letter)
+}
+
 // Call evaluates the function where its denominator is not zero.
 func (u Quotient) Call(c *Context, args []Value) (Value, error) {
 	num, err := Polynomial{u.Num, u.Letter}.Call(c, args)

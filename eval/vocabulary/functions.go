@@ -17,7 +17,7 @@ var functions = []Entry{
 				return value.FieldPolynomial{P: u.F.Numerator(), Letter: u.Letter}, nil
 			}},
 			{Args: []Arg{{Prep: "of", Kind: Number}}, Do: func(c *value.Context, a []value.Value) (value.Value, error) {
-				return rationalPart(a[0], true)
+				return part(a[0], true)
 			}},
 		},
 		Examples: []Example{{"numerator of 6/4", "3"}, {"numerator of t/(t + 1) over F_2(t)", "t over F_2"}},
@@ -31,7 +31,7 @@ var functions = []Entry{
 				return value.FieldPolynomial{P: u.F.Denominator(), Letter: u.Letter}, nil
 			}},
 			{Args: []Arg{{Prep: "of", Kind: Number}}, Do: func(c *value.Context, a []value.Value) (value.Value, error) {
-				return rationalPart(a[0], false)
+				return part(a[0], false)
 			}},
 		},
 		Examples: []Example{{"denominator of 6/4", "2"}},
@@ -77,7 +77,9 @@ func finiteSubfields(c *value.Context, K *field.Field) (value.Value, error) {
 	return value.List{Items: items}, nil
 }
 
-func rationalPart(v value.Value, above bool) (value.Value, error) {
+// part is the numerator or the denominator of a rational number, or of a
+// fraction over Q.
+func part(v value.Value, above bool) (value.Value, error) {
 	switch v := v.(type) {
 	case value.Integer:
 		if above {
@@ -89,6 +91,11 @@ func rationalPart(v value.Value, above bool) (value.Value, error) {
 			return value.Integer{N: v.Q.Num()}, nil
 		}
 		return value.Integer{N: v.Q.Denom()}, nil
+	case value.Quotient:
+		if above {
+			return value.Polynomial{P: v.Num, Letter: v.Letter}, nil
+		}
+		return value.Polynomial{P: v.Den, Letter: v.Letter}, nil
 	}
 	return nil, algebra.Errorf(algebra.Invalid, "a numerator and a denominator belong to fractions, not to %s", v.Kind())
 }

@@ -51,6 +51,8 @@ var (
 	Polynomial = Kind{"a polynomial", "f", takePolynomial}                              // value.Polynomial or value.FieldPolynomial
 	FieldPoly  = kind[value.FieldPolynomial]("a polynomial over a finite field", "f")   // value.FieldPolynomial
 	RatPoly    = kind[value.Polynomial]("a polynomial with rational coefficients", "f") // value.Polynomial
+	Quotient   = kind[value.Quotient]("a rational function over Q", "u")                // value.Quotient
+	Scalar     = Kind{"a number or an element", "c", takeScalar}                        // one of Integer, Rational, Residue, Element
 	Fraction   = kind[value.RationalFunction]("a rational function", "u")               // value.RationalFunction
 	FunField   = kind[value.FunctionField]("a field of rational functions", "K(t)")     // value.FunctionField
 	Map        = kind[value.Map]("a map between finite fields", "s")                    // value.Map
@@ -79,6 +81,15 @@ func takeSeveral(_ *value.Context, v value.Value) (value.Value, bool) {
 
 func takeNumber(_ *value.Context, v value.Value) (value.Value, bool) {
 	return value.AsNumber(v)
+}
+
+func takeScalar(_ *value.Context, v value.Value) (value.Value, bool) {
+	v, _ = value.AsNumber(v)
+	switch v.(type) {
+	case value.Integer, value.Rational, value.Residue, value.Element:
+		return v, true
+	}
+	return nil, false
 }
 
 func takePair(_ *value.Context, v value.Value) (value.Value, bool) {

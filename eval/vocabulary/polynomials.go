@@ -81,7 +81,10 @@ var polynomials = []Entry{
 				u := a[0].(value.RationalFunction)
 				return value.RationalFunction{F: u.F.Derivative(c.W), Letter: u.Letter}, nil
 			}},
-			{Args: []Arg{{Prep: "of", Kind: Number}}, Do: func(c *value.Context, a []value.Value) (value.Value, error) {
+			{Args: []Arg{{Prep: "of", Kind: Quotient}}, Do: func(c *value.Context, a []value.Value) (value.Value, error) {
+				return a[0].(value.Quotient).Derivative(c), nil
+			}},
+			{Args: []Arg{{Prep: "of", Kind: Scalar}}, Do: func(c *value.Context, a []value.Value) (value.Value, error) {
 				return value.Operate(c, "-", a[0], a[0])
 			}},
 		},
