@@ -118,6 +118,16 @@ func (u Fraction) Pow(w *algebra.Work, e *big.Int) (Fraction, error) {
 	return Fraction{n, d}, nil
 }
 
+// Eval is u at the constant a. It is an error of kind Undefined when a is a
+// pole.
+func (u Fraction) Eval(w *algebra.Work, a field.Elem) (field.Elem, error) {
+	d := u.d.Eval(w, a)
+	if d.IsZero() {
+		return field.Elem{}, algebra.Errorf(algebra.Undefined, "the rational function has a pole there: its denominator is 0")
+	}
+	return u.n.Eval(w, a).Div(w, d)
+}
+
 // MaxDegree is the largest degree of a numerator or denominator that Pow and
 // Frobenius make.
 const MaxDegree = 1 << 20

@@ -75,6 +75,39 @@ func FrobeniusIsOnto(K *field.Field) algebra.Verdict {
 	return v
 }
 
+// IsPerfect says whether every element of K(t) is a p-th power, which is what
+// perfect means in characteristic p: no, unlike the finite field K.
+func IsPerfect(K *field.Field) algebra.Verdict { return FrobeniusIsOnto(K) }
+
+// IsSquare says whether u = v^2 for some v: in lowest terms, when every
+// irreducible factor of numerator and denominator has even multiplicity and the
+// leading coefficient is a square in F_q. In characteristic 2 this is the test
+// for p-th powers.
+func (u Fraction) IsSquare(w *algebra.Work) algebra.Verdict {
+	if u.IsZero() {
+		return algebra.Because(true, "0 = 0^2")
+	}
+	if u.Constants().Characteristic().Cmp(big.NewInt(2)) == 0 {
+		return u.IsPthPower(w)
+	}
+	for _, f := range []field.Polynomial{u.n, u.d} {
+		_, list := f.Factor(w)
+		for _, g := range list {
+			if g.E%2 == 1 {
+				v := algebra.Because(false, "an irreducible factor has odd multiplicity %d", g.E)
+				v.Evidence = v.Evidence.With("factor", g.F)
+				return v
+			}
+		}
+	}
+	if lead := u.n.Leading(); !lead.IsSquare(w).Holds {
+		v := algebra.Because(false, "the leading coefficient is not a square in the constants")
+		v.Evidence = v.Evidence.With("leading coefficient", lead)
+		return v
+	}
+	return algebra.Because(true, "all multiplicities are even, and the leading coefficient is a square")
+}
+
 // FixedDegree is the degree over F_p of the field of the u in K(t) with
 // u^(p^k) = u, k >= 1. A non-constant u is not fixed, since its degree is
 // multiplied by p^k; so this is the fixed field in K, of degree gcd(k, n).

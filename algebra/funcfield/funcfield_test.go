@@ -131,3 +131,45 @@ func TestFixed(t *testing.T) {
 		t.Errorf("finite subfields of degrees %v", d)
 	}
 }
+
+// Squares are squares, and times t or a non-square they are not; values add and
+// multiply.
+func TestSquareAndEval(t *testing.T) {
+	w := algebra.NewWork(nil)
+	for _, K := range []*field.Field{standard(t, 2, 3), standard(t, 3, 2), standard(t, 7, 1)} {
+		r := rand.New(rand.NewPCG(2, 2))
+		x := FromPolynomial(field.NewPolynomial(K, []field.Elem{K.Zero(), K.One()}))
+		if IsPerfect(K).Holds {
+			t.Error("K(t) is not perfect")
+		}
+		for range 40 {
+			u, v := fraction(t, w, K, r), fraction(t, w, K, r)
+			s := u.Mul(w, u)
+			if !s.IsSquare(w).Holds {
+				t.Fatal("u^2 should be a square")
+			}
+			if !u.IsZero() && s.Mul(w, x).IsSquare(w).Holds {
+				t.Fatal("t u^2 is no square")
+			}
+			for n := int64(1); n < K.Order().Int64(); n++ {
+				a := K.Element(big.NewInt(n))
+				if c := FromPolynomial(field.NewPolynomial(K, []field.Elem{a})); !u.IsZero() && s.Mul(w, c).IsSquare(w).Holds != a.IsSquare(w).Holds {
+					t.Fatal("c u^2 is a square exactly when c is")
+				}
+				ua, err1 := u.Eval(w, a)
+				va, err2 := v.Eval(w, a)
+				if pole := u.d.Eval(w, a).IsZero(); (err1 != nil) != pole {
+					t.Fatalf("pole %v: %v", pole, err1)
+				}
+				if err1 != nil || err2 != nil {
+					continue
+				}
+				sum, err3 := u.Add(w, v).Eval(w, a)
+				product, err4 := u.Mul(w, v).Eval(w, a)
+				if err3 != nil || err4 != nil || !sum.Equal(ua.Add(va)) || !product.Equal(ua.Mul(w, va)) {
+					t.Fatal("values do not add and multiply")
+				}
+			}
+		}
+	}
+}
