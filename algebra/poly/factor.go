@@ -248,44 +248,52 @@ func EqualDegree(w *algebra.Work, A Arith, f *Poly, d int) []*Poly {
 func (z *frobenius) halve(w *algebra.Work, r *rand.Rand, d int) (g, h *Poly) {
 	f := z.M.Poly()
 	for {
-		w.Poll()
-		u := Random(z.A, r, f.Degree())
-		if u.N <= 1 {
-			continue
-		}
-		g = GCD(w, z.A, f, z.separator(w, u, d))
-		if g.N > 1 && g.N < f.N {
-			h = new(Poly)
-			z.A.DivRem(w, h, nil, f, g)
-			return g, h
+		if u := Random(z.A, r, f.Degree()); u.N > 1 {
+			if g, h = parts(w, z.A, f, z.separator(w, u, d)); g != nil {
+				return g, h
+			}
 		}
 	}
+}
+
+// parts is f as its common factor g with t times the rest, and nil when one of
+// them is constant.
+func parts(w *algebra.Work, A Arith, f, t *Poly) (g, h *Poly) {
+	w.Poll()
+	g = GCD(w, A, f, t)
+	if g.N <= 1 || g.N == f.N {
+		return nil, nil
+	}
+	h = new(Poly)
+	A.DivRem(w, h, nil, f, g)
+	return g, h
 }
 
 // separator is a polynomial that vanishes modulo about half of the
 // irreducible factors, all of degree d, for a random u: for odd q,
 // u^((q^d-1)/2) - 1 [CZ], and for even q the trace of u to F_2.
 func (z *frobenius) separator(w *algebra.Work, u *Poly, d int) *Poly {
-	A := z.A
-	q := A.Order()
-	if q.Bit(0) == 0 {
-		t := z.sum(w, u, d, A.Add)
-		s := t
-		for range A.Degree() - 1 {
-			w.Poll()
-			v := new(Poly)
-			z.M.SqrMod(w, v, s)
-			s = v
-			sum := new(Poly)
-			A.Add(sum, t, s)
-			t = sum
-		}
+	op := z.A.Add
+	if z.A.Order().Bit(0) == 1 {
+		op = func(y, f, g *Poly) { z.M.MulMod(w, y, f, g) }
+	}
+	return character(w, z.A, z.M, z.sum(w, u, d, op), z.A)
+}
+
+// character is t^((q-1)/2) - 1 for odd q, and the trace of t to F_2 for even q,
+// where the values of t lie in B with q elements.
+func character(w *algebra.Work, A Arith, M Modulus, t *Poly, B Arith) *Poly {
+	if q := B.Order(); q.Bit(0) == 1 {
+		t = powModulus(w, A, M, t, new(big.Int).Rsh(q, 1))
+		A.Sub(t, t, One(A))
 		return t
 	}
-	t := z.sum(w, u, d, func(y, f, g *Poly) { z.M.MulMod(w, y, f, g) })
-	e := new(big.Int).Rsh(q, 1)
-	t = powModulus(w, A, z.M, t, e)
-	A.Sub(t, t, One(A))
+	s := Clone(t)
+	for range B.Degree() - 1 {
+		w.Poll()
+		M.SqrMod(w, s, s)
+		A.Add(t, t, s)
+	}
 	return t
 }
 

@@ -183,9 +183,11 @@ func (z *frobenius) power(w *algebra.Work, k int) *Poly {
 		if k>>b == 0 {
 			continue
 		}
-		if h != z.x {
-			h = NewComposer(w, z.A, z.M, h, z.M.Poly().N).Apply(w, h)
+		if h == z.x {
+			h = z.first(w)
+			continue
 		}
+		h = NewComposer(w, z.A, z.M, h, z.M.Poly().N).Apply(w, h)
 		if k>>b&1 == 1 {
 			h = z.next(w, h)
 		}

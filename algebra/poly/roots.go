@@ -8,6 +8,8 @@ import (
 
 // References:
 //
+//	[Berlekamp] E. Berlekamp, Factoring polynomials over large finite fields,
+//	  1970: separation of roots by the trace.
 //	[Rabin] M. Rabin, Probabilistic algorithms in finite fields, 1980, section
 //	  3: the roots in K are those of gcd(x^q - x, f).
 
@@ -33,35 +35,45 @@ func Roots(w *algebra.Work, A Arith, f *Poly) []Root {
 }
 
 // linear is the list of the linear factors of a squarefree monic f.
-func linear(w *algebra.Work, A Arith, f *Poly) []*Poly { return EqualDegree(w, A, split(w, A, f), 1) }
-
-// split is the product of x - a over the different roots a of f in K, not
-// zero.
-func split(w *algebra.Work, A Arith, f *Poly) *Poly {
-	if f.N <= 1 {
-		return One(A)
+func linear(w *algebra.Work, A Arith, f *Poly) []*Poly {
+	var list []*Poly
+	s := newSplitting(w, A, f)
+	var split func(f *Poly)
+	split = func(f *Poly) {
+		switch f.N {
+		case 0, 1:
+		case 2:
+			list = append(list, f)
+		default:
+			g, h := s.halve(w, f)
+			split(g)
+			split(h)
+		}
 	}
-	h := new(Poly)
-	A.Sub(h, FrobeniusMod(w, A, f), X(A))
-	return GCD(w, A, f, h)
+	split(s.f)
+	return list
 }
 
 // Root1 is one root of f, not zero, in K, and nil when there is none. The
 // smaller part is split again until it is linear, which is much less work than
 // all roots. Which root it is depends on f alone.
 func Root1(w *algebra.Work, A Arith, f *Poly) Elem {
-	g := split(w, A, f)
-	if g.N <= 1 {
+	if f.N <= 1 {
 		return nil
 	}
-	r := seeded(g)
+	f, _ = Monic(w, A, f)
+	s := newSplitting(w, A, f)
+	g := s.f
 	for g.N > 2 {
-		a, b := newFrobenius(w, A, g).halve(w, r, 1)
+		a, b := s.halve(w, g)
 		if g = a; b.N < a.N {
 			g = b
 		}
-		g, _ = Monic(w, A, g)
 	}
+	if g.N < 2 {
+		return nil
+	}
+	g, _ = Monic(w, A, g)
 	e := Coeff(A, g, 0)
 	A.NegElem(e, e)
 	return e
