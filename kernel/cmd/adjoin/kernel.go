@@ -2,7 +2,6 @@ package main
 
 import (
 	"errors"
-	"log"
 	"os"
 	"path/filepath"
 
@@ -37,7 +36,7 @@ func serve(file string, b budget) error {
 	o := kernel.Options{
 		Engine:  engine.New(b.options()),
 		History: kernel.NewHistory(kernel.DefaultHistory()),
-		Log:     log.New(os.Stderr, "adjoin: ", 0),
+		Log:     kernel.NewLog(os.Stderr, "adjoin: "),
 	}
 	r, ok, err := kernel.ReadRegistration(file)
 	if err != nil {
