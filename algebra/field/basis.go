@@ -50,7 +50,7 @@ func NewBasis(w *algebra.Work, L, K *Field, elements []Elem) (b *Basis, err erro
 }
 
 // PowerBasis is 1, c, ..., c^(n-1) for a generator c of L over K: that of L
-// when it serves, and otherwise the element of least code that does.
+// when it serves, and otherwise the first of Scattered that does.
 func PowerBasis(w *algebra.Work, L, K *Field) (b *Basis, err error) {
 	defer algebra.Catch(&err)
 	if err := below(K, L); err != nil {
@@ -58,8 +58,12 @@ func PowerBasis(w *algebra.Work, L, K *Field) (b *Basis, err error) {
 	}
 	n := L.absolute / K.absolute
 	c := L.Generator()
-	for code := new(big.Int); c.degreeOver(w, K.absolute) < n; code.Add(code, big.NewInt(1)) {
-		c = L.Element(code)
+	if c.degreeOver(w, K.absolute) < n {
+		for c = range L.Scattered {
+			if c.degreeOver(w, K.absolute) == n {
+				break
+			}
+		}
 	}
 	elements := []Elem{L.One()}
 	for i := 1; i < n; i++ {
@@ -68,21 +72,44 @@ func PowerBasis(w *algebra.Work, L, K *Field) (b *Basis, err error) {
 	return NewBasis(w, L, K, elements)
 }
 
-// NormalBasis is c, c^|K|, c^(|K|^2), ... for the normal element c of L over K
-// of least code.
+// NormalBasis is c, c^|K|, c^(|K|^2), ... for the first of Scattered that is
+// normal over K. Normal elements are frequent, but those of small code may lie
+// in a subspace that has none.
 func NormalBasis(w *algebra.Work, L, K *Field) (b *Basis, err error) {
 	defer algebra.Catch(&err)
 	if err := below(K, L); err != nil {
 		return nil, err
 	}
-	for code := big.NewInt(1); ; code.Add(code, big.NewInt(1)) {
+	for c := range L.Scattered {
 		w.Poll()
-		c := L.Element(code)
 		if v, err := c.IsNormal(w, K); err != nil {
 			return nil, err
 		} else if v.Holds {
 			return NewBasis(w, L, K, c.conjugates(w, K.absolute))
 		}
+	}
+	return nil, algebra.Errorf(algebra.Unable, "no normal element was found")
+}
+
+// Scattered yields all elements of K in an order without regularity: those of
+// the codes a, a+m, a+2m, ... modulo |K|, where a is the largest integer up to
+// 2|K|/3 and m the largest up to 4|K|/5 that is prime to |K|. (F. Luebeck,
+// Standard generators of finite fields and their cyclic subgroups, 2023, takes
+// pseudo-random elements in this order.)
+func (K *Field) Scattered(yield func(Elem) bool) {
+	q, one := K.Order(), big.NewInt(1)
+	a := new(big.Int).Mul(q, big.NewInt(2))
+	a.Div(a, big.NewInt(3))
+	m := new(big.Int).Mul(q, big.NewInt(4))
+	m.Div(m, big.NewInt(5))
+	for new(big.Int).GCD(nil, nil, m, q).Cmp(one) != 0 {
+		m.Sub(m, one)
+	}
+	for i := new(big.Int); i.Cmp(q) < 0; i.Add(i, one) {
+		if !yield(K.Element(a)) {
+			return
+		}
+		a.Add(a, m).Mod(a, q)
 	}
 }
 

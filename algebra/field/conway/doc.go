@@ -16,16 +16,16 @@
 // polynomial, and these ranges of degrees n; every divisor of a degree in it
 // is in it too:
 //
-//	p = 2       n <= 40
-//	p = 3       n <= 24
-//	p = 5       n <= 16
-//	p = 7       n <= 12
-//	p <= 31     n <= 8
-//	p < 100     n <= 6
-//	p < 256     n <= 4
-//	p < 1000    n <= 2
+//	p = 2       n <= 48
+//	p = 3       n <= 30
+//	p = 5       n <= 20
+//	p = 7       n <= 16
+//	p <= 31     n <= 12
+//	p < 1000    n <= 7
 //
-// The test TestTable with -write makes it anew.
+// To make it anew takes about ten minutes:
+//
+//	go test -run TestWrite -write
 //
 // What is not here: fields. Package field asks Lookup.
 package conway

@@ -33,10 +33,20 @@ type search struct {
 // divisors m = n/l, l prime; it is not called for n = 1. p^n - 1 must be one
 // that integer.FactorPower factors.
 func Search(w *algebra.Work, p int64, n int, known func(m int) []int64) []int64 {
-	s := &search{w: w, p: big.NewInt(p), n: n}
 	if n == 1 {
-		return []int64{p - leastPrimitiveRoot(w, s.p), 1}
+		return []int64{p - leastPrimitiveRoot(w, big.NewInt(p)), 1}
 	}
+	s := newSearch(w, p, n, known)
+	// About p^(n - phi(n)) polynomials come before the right one, and there are
+	// about p^phi(n) compatible elements.
+	if 2*integer.EulerPhiInt(n) > n {
+		return s.coefficients(s.inOrder())
+	}
+	return s.coefficients(s.amongCompatible())
+}
+
+func newSearch(w *algebra.Work, p int64, n int, known func(m int) []int64) *search {
+	s := &search{w: w, p: big.NewInt(p), n: n}
 	s.F = rep.Prime(s.p)
 	s.root = big.NewInt(p - known(1)[0])
 	s.units = units(s.p, n)
@@ -45,15 +55,11 @@ func Search(w *algebra.Work, p int64, n int, known func(m int) []int64) []int64 
 	for _, q := range integer.FactorInt(n) {
 		s.below[n/q.P] = poly.FromInts(s.F, known(n/q.P)...)
 	}
-	// About p^(n - phi(n)) polynomials come before the right one, and there are
-	// about p^phi(n) compatible elements.
-	f := new(poly.Poly)
-	if phi := integer.EulerPhiInt(n); 2*phi > n {
-		f = s.inOrder()
-	} else {
-		f = s.amongCompatible()
-	}
-	c := make([]int64, n+1)
+	return s
+}
+
+func (s *search) coefficients(f *poly.Poly) []int64 {
+	c := make([]int64, s.n+1)
 	for i := range c {
 		c[i] = s.F.Code(poly.Coeff(s.F, f, i)).Int64()
 	}
@@ -159,6 +165,13 @@ func (s *search) isConway(f *poly.Poly) bool {
 // root of the right element, times the powers of an element z of order M.
 func (s *search) amongCompatible() *poly.Poly {
 	K := &elements{s: s, A: rep.Extend(s.w, s.F, poly.FindIrreducible(s.w, s.F, s.n))}
+	return K.least()
+}
+
+// least is the least of the minimal polynomials of the compatible primitive
+// elements.
+func (K *elements) least() *poly.Poly {
+	s := K.s
 	M, target := K.condition()
 	a, z, free := K.rootsOf(M, target)
 	K.prepareTrace()
@@ -176,9 +189,6 @@ func (s *search) amongCompatible() *poly.Poly {
 			}
 		}
 		K.A.MulElem(s.w, a, a, z)
-	}
-	if !s.isConway(best) {
-		panic("conway: the search went wrong")
 	}
 	return best
 }
