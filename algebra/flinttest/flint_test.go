@@ -1,6 +1,3 @@
-// Package flinttest checks the algebra against FLINT, the Fast Library for
-// Number Theory, through its Python binding: the same random questions to
-// both. It has tests only.
 package flinttest
 
 import (
@@ -106,7 +103,7 @@ func spaces() []space {
 	for _, c := range []struct {
 		p int64
 		n int
-	}{{2, 2}, {2, 8}, {2, 11}, {2, 64}, {2, 127}, {3, 5}, {7, 3}, {101, 4}, {1<<31 - 1, 3}} {
+	}{{2, 2}, {2, 8}, {2, 11}, {2, 64}, {2, 127}, {3, 2}, {3, 5}, {3, 40}, {7, 3}, {101, 4}, {1<<31 - 1, 3}, {1<<61 - 1, 2}} {
 		k := rep.Prime(big.NewInt(c.p))
 		m := poly.FindIrreducible(w, k, c.n)
 		s := space{p: fmt.Sprint(c.p), A: k}
@@ -162,6 +159,20 @@ func TestPolynomials(t *testing.T) {
 				A.Mul(w, gh, g, h)
 				q["op"], q["f"], q["g"] = "gcd", s.codes(fh), s.codes(gh)
 				check("gcd", q, poly.GCD(w, A, fh, gh))
+				d, u, v := poly.XGCD(w, A, f, g)
+				q["op"], q["f"], q["g"] = "xgcd", s.codes(f), s.codes(g)
+				if g.N > 1 && f.N > 1 {
+					check("extended gcd", q, d, u, v)
+				}
+				q["op"], q["f"], q["g"] = "compose", s.codes(h), s.codes(g)
+				check("composition", q, poly.Compose(w, A, h, g))
+				A.Derivative(z, f)
+				q["op"], q["f"] = "derivative", s.codes(f)
+				check("derivative", q, z)
+				if fh.N > 1 {
+					q["op"], q["f"], q["g"], q["m"] = "compose modulo", s.codes(g), s.codes(h), s.codes(fh)
+					check("composition modulo m", q, poly.ComposeMod(w, A, g, h, fh))
+				}
 				if g.N > 1 {
 					e := new(big.Int).SetUint64(r.Uint64())
 					q["op"], q["f"], q["g"], q["e"] = "power", s.codes(f), s.codes(g), e.String()
@@ -215,6 +226,51 @@ func TestFactorizations(t *testing.T) {
 	}
 }
 
+func TestRootsAndIrreducibility(t *testing.T) {
+	server := connect(t)
+	w := algebra.NewWork(nil)
+	for _, s := range spaces() {
+		t.Run(s.name, func(t *testing.T) {
+			A, r := s.A, rand.New(rand.NewPCG(seed, uint64(len(s.name))))
+			for range 8 {
+				f := poly.Random(A, r, 3+r.IntN(5))
+				if f.N < 2 {
+					continue
+				}
+				q := s.question("irreducible")
+				q["f"] = s.codes(f)
+				var irreducible bool
+				server.ask(t, q, &irreducible)
+				if got := poly.IsIrreducible(w, A, f); got.Holds != irreducible {
+					t.Fatalf("seed %d: %v is irreducible: %v, FLINT has %v", seed, s.codes(f), got, irreducible)
+				}
+				// Three roots, one of them twice or thrice.
+				a := poly.RandomElem(A, r)
+				for _, b := range []poly.Elem{a, a, poly.RandomElem(A, r), poly.RandomElem(A, r)} {
+					x := poly.X(A)
+					A.Sub(x, x, poly.Constant(A, b))
+					A.Mul(w, f, f, x)
+				}
+				q["op"], q["f"] = "roots", s.codes(f)
+				var answer [][2]any
+				server.ask(t, q, &answer)
+				var want, got []string
+				for _, x := range answer {
+					want = append(want, fmt.Sprint(x[0], "^", x[1]))
+				}
+				for _, x := range poly.Roots(w, A, f) {
+					got = append(got, fmt.Sprint(A.Code(x.A), "^", x.E))
+				}
+				sort.Strings(want)
+				sort.Strings(got)
+				if !reflect.DeepEqual(got, want) {
+					t.Fatalf("seed %d: roots of %v are %v, FLINT has %v", seed, s.codes(f), got, want)
+				}
+			}
+		})
+	}
+}
+
 func TestElements(t *testing.T) {
 	server := connect(t)
 	w := algebra.NewWork(nil)
@@ -241,11 +297,13 @@ func TestElements(t *testing.T) {
 			for range 20 {
 				draw := func() field.Elem { return K.Element(K.Arith().Code(poly.RandomElem(K.Arith(), r))) }
 				a, b := draw(), draw()
+				e, k1 := new(big.Int).SetUint64(r.Uint64()), r.IntN(2*K.Degree())
 				q := s.question("element")
-				q["a"], q["b"] = a.Code().String(), b.Code().String()
+				q["a"], q["b"], q["e"], q["k"] = a.Code().String(), b.Code().String(), e.String(), k1
 				var answer struct {
-					Product, Trace, Norm string
-					Inverse              *string
+					Product, Trace, Norm, Power, Frobenius string
+					Inverse                                *string
+					Square                                 bool
 				}
 				server.ask(t, q, &answer)
 				trace, err := a.Trace(w, k)
@@ -256,9 +314,27 @@ func TestElements(t *testing.T) {
 				if err != nil {
 					t.Fatal(err)
 				}
-				got := []string{a.Mul(w, b).Code().String(), trace.Code().String(), norm.Code().String()}
-				if want := []string{answer.Product, answer.Trace, answer.Norm}; !reflect.DeepEqual(got, want) {
-					t.Fatalf("seed %d: product, trace, norm are %v, FLINT has %v", seed, got, want)
+				power, err := a.Pow(w, e)
+				if err != nil {
+					t.Fatal(err)
+				}
+				got := []string{a.Mul(w, b).Code().String(), trace.Code().String(), norm.Code().String(),
+					power.Code().String(), a.Frobenius(w, k1).Code().String()}
+				if want := []string{answer.Product, answer.Trace, answer.Norm, answer.Power, answer.Frobenius}; !reflect.DeepEqual(got, want) {
+					t.Fatalf("seed %d: product, trace, norm, power, conjugate are %v, FLINT has %v", seed, got, want)
+				}
+				if v := a.IsSquare(w); v.Holds != answer.Square {
+					t.Fatalf("seed %d: %v is a square: %v, FLINT has %v", seed, a.Code(), v.Holds, answer.Square)
+				}
+				if n, _, err := a.Order(w); err == nil {
+					var right bool
+					q["op"], q["n"] = "is order", n.String()
+					server.ask(t, q, &right)
+					if !right {
+						t.Fatalf("seed %d: FLINT denies that %v has order %v", seed, a.Code(), n)
+					}
+				} else if !a.IsZero() {
+					t.Fatalf("seed %d: the order of %v: %v", seed, a.Code(), err)
 				}
 				if inverse, err := K.One().Div(w, a); err == nil && inverse.Code().String() != *answer.Inverse {
 					t.Fatalf("seed %d: the inverse is %v, FLINT has %v", seed, inverse.Code(), *answer.Inverse)
@@ -315,6 +391,41 @@ func TestIntegers(t *testing.T) {
 		byText(want)
 		if !reflect.DeepEqual(got, want) {
 			t.Fatalf("seed %d: factors of %v are %v, FLINT has %v", seed, n, got, want)
+		}
+	}
+}
+
+// Primes and composites around powers of two, where the methods change.
+func TestPrimality(t *testing.T) {
+	server := connect(t)
+	w := algebra.NewWork(nil)
+	r := rand.New(rand.NewPCG(seed, 3))
+	for _, bits := range []uint{2, 8, 16, 31, 32, 33, 62, 63, 64, 65, 80, 127, 128, 200, 521} {
+		for range 30 {
+			n := new(big.Int).Lsh(big.NewInt(1), bits)
+			n.Add(n, big.NewInt(r.Int64N(2001)-1000))
+			if n.Sign() <= 0 {
+				continue
+			}
+			var want bool
+			server.ask(t, question{"op": "prime", "n": n.String()}, &want)
+			if got := integer.IsPrime(w, n); got.Holds != want {
+				t.Fatalf("seed %d: %v is prime: %v, FLINT has %v", seed, n, got, want)
+			}
+		}
+	}
+}
+
+func TestCyclotomicPolynomials(t *testing.T) {
+	server := connect(t)
+	for n := 1; n <= 420; n++ {
+		var want, got []string
+		server.ask(t, question{"op": "cyclotomic", "n": n}, &want)
+		for _, c := range integer.Cyclotomic(n) {
+			got = append(got, c.String())
+		}
+		if !reflect.DeepEqual(got, want) {
+			t.Fatalf("cyclotomic polynomial %d is %v, FLINT has %v", n, got, want)
 		}
 	}
 }

@@ -45,6 +45,10 @@ def answer(q):
     op = q["op"]
     if op == "factor integer":
         return [[str(p), e] for p, e in flint.fmpz(int(q["n"])).factor()]
+    if op == "prime":
+        return bool(flint.fmpz(int(q["n"])).is_prime())
+    if op == "cyclotomic":
+        return [str(c) for c in flint.fmpz_poly.cyclotomic(q["n"]).coeffs()]
     if op == "conway":
         m = flint.fq_default_ctx(int(q["p"]), q["n"]).modulus()
         return [str(c) for c in m.coeffs()]
@@ -64,13 +68,30 @@ def answer(q):
             return str(f.resultant(g))
     p = q["p"]
     k, ring = field(p, q["modulus"])
+    if op == "is order":
+        a, n = element(k, p, q["a"]), int(q["n"])
+        return a**n == 1 and all(a ** (n // int(r)) != 1 for r, _ in flint.fmpz(n).factor())
     if op == "element":
         a, b = element(k, p, q["a"]), element(k, p, q["b"])
         inverse = code(p, a.inverse()) if a != 0 else None
-        return {"product": code(p, a * b), "inverse": inverse, "trace": str(int(a.trace())), "norm": str(int(a.norm()))}
+        return {
+            "product": code(p, a * b),
+            "inverse": inverse,
+            "trace": str(int(a.trace())),
+            "norm": str(int(a.norm())),
+            "power": code(p, a ** int(q["e"])),
+            "frobenius": code(p, a.frobenius(q["k"])),
+            "square": a.is_square(),
+        }
     poly = lambda cs: ring([element(k, p, c) for c in cs])
     codes = lambda f: [code(p, c) for c in f.coeffs()]
     f = poly(q["f"])
+    if op == "derivative":
+        return codes(f.derivative())
+    if op == "irreducible":
+        return f.is_irreducible()
+    if op == "roots":
+        return [[code(p, a), e] for a, e in f.roots()]
     if op == "factor":
         lead, factors = f.factor()
         return {"lead": code(p, lead), "factors": [[codes(g), e] for g, e in factors]}
@@ -82,6 +103,12 @@ def answer(q):
     if op == "divide":
         quotient, remainder = divmod(f, g)
         return [codes(quotient), codes(remainder)]
+    if op == "xgcd":
+        return [codes(h) for h in f.xgcd(g)]
+    if op == "compose":
+        return codes(f.compose(g))
+    if op == "compose modulo":
+        return codes(f.compose_mod(g, poly(q["m"])))
     if op == "power":
         return codes(f.pow_mod(int(q["e"]), g))
     raise ValueError(op)
