@@ -152,8 +152,10 @@ func (s *Session) Inspect(src string, at int) (display.Bundle, bool) {
 	if !ok {
 		return display.Bundle{}, false
 	}
-	if v, ok := s.bound.Load().names[t.Text]; ok {
-		text := t.Text + " is " + value.Plain(v).Kind() + "\n" + value.Cut(v.Text(nil), inspectWidth)
+	bound := s.bound.Load()
+	if v, ok := bound.names[t.Text]; ok {
+		c := cell{scope: &scope{base: bound}}
+		text := t.Text + " is " + value.Plain(v).Kind() + "\n" + value.Cut(v.Text(c.printer()), inspectWidth)
 		return display.Text{Text: text}.Bundle(), true
 	}
 	if words := phraseAround(src, t.Span); words != "" {

@@ -36,7 +36,7 @@ var (
 	Text       = kind[value.Text]("a text", `"..."`)                                                                              // value.Text
 	Truth      = kind[value.Verdict]("a statement that is true or false", "(claim)")                                              // value.Verdict
 	Collection = kind[value.Collection]("a list or set", "L")                                                                     // value.Collection
-	Several    = Kind{"several things in parentheses", "(a, b, ...)", takeSeveral}                                               // value.Tuple, at least one member
+	Several    = Kind{"several things in parentheses", "(a, b, ...)", takeSeveral}                                                // value.Tuple, at least one member
 	Number     = Kind{"a number, an element or a polynomial", "a", takeNumber}                                                    // one of the kinds with + and *
 	Range      = kind[value.Range]("a range", "1..n")
 	Pair       = Kind{"two things in parentheses", "(a, b)", takePair} // value.Tuple of two

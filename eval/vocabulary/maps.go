@@ -140,15 +140,16 @@ func embeddings(c *value.Context, a []value.Value) (value.Value, error) {
 	if err != nil {
 		return nil, err
 	}
+	n := &value.Notes{Caption: "Homomorphisms from " + value.RingName(c.Printer(), K) + " to " + value.RingName(c.Printer(), L), Heads: []string{"number", "image of the generator"}}
 	if !v.Holds {
-		return value.List{}, nil
+		n.Note = "there is none: " + v.Evidence.Reason
+		return value.List{Notes: n}, nil
 	}
 	list, err := field.Embeddings(c.W, K.K, L.K)
 	if err != nil {
 		return nil, err
 	}
 	items := make([]value.Value, len(list))
-	n := &value.Notes{Caption: "Homomorphisms from " + value.RingName(c.Printer(), K) + " to " + value.RingName(c.Printer(), L), Heads: []string{"number", "image of the generator"}}
 	for i, m := range list {
 		items[i] = value.Map{M: m}
 		n.Rows = append(n.Rows, []value.Value{value.Int(i + 1), value.Element{E: m.Image()}})

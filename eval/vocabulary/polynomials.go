@@ -192,6 +192,10 @@ var polynomials = []Entry{
 				items = append(items, value.Element{E: r.A})
 				n.Rows = append(n.Rows, []value.Value{value.Element{E: r.A}, value.Int(r.E)})
 			}
+			if len(items) == 0 {
+				K := g.P.Field()
+				n.Note = "there is none: it has no common factor with x^q - x, where q = " + value.Short(K.Order())
+			}
 			return value.List{Items: items, Notes: n}, nil
 		}}},
 		Examples: []Example{{"roots of x^2 - 2 in F_7", "[3, 4]"}, {"roots of x^2 + x + 1 in F_4", "[g_4, g_4 + 1]"}},
