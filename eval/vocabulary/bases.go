@@ -23,7 +23,7 @@ var bases = []Entry{
 	},
 	{
 		Words: "normal basis", Class: Noun, Topic: "bases",
-		Meaning: "the conjugates b, b^q, b^(q^2), ... of the first element whose conjugates form a basis of L/K",
+		Meaning: "the conjugates b, b^q, b^(q^2) and so on of an element, chosen by a fixed rule, whose conjugates form a basis of L/K",
 		Source:  "R. Lidl and H. Niederreiter, Finite Fields, 1997, theorem 2.35",
 		Cases: []Case{{Args: []Arg{{Prep: "of", Kind: Extension}}, Do: func(c *value.Context, a []value.Value) (value.Value, error) {
 			e := a[0].(value.Extension)
@@ -33,7 +33,7 @@ var bases = []Entry{
 			}
 			return elementList(b.Elements()), nil
 		}}},
-		Examples: []Example{{"normal basis of F_8/F_2", "[g_8 + 1, g_8^2 + 1, g_8^2 + g_8 + 1]"}},
+		Examples: []Example{{"normal basis of F_8/F_2", "[g_8^2 + 1, g_8^2 + g_8 + 1, g_8 + 1]"}},
 	},
 	{
 		Words: "dual basis", Class: Noun, Topic: "bases",
