@@ -406,7 +406,13 @@ func (c *cell) comprehension(x *lang.Comprehension) (value.Value, error) {
 	if x.Braces {
 		return value.NewSet(c.ctx, items)
 	}
-	return value.List{Items: items}, nil
+	list := value.List{Items: items}
+	if t, ok := x.X.(*lang.Tuple); ok {
+		for _, place := range t.Items {
+			list.Heads = append(list.Heads, lang.Print(place))
+		}
+	}
+	return list, nil
 }
 
 // bindAll binds one name to a value, or several to the parts of it.

@@ -12,7 +12,8 @@ import (
 // List is [a, b]: values in an order, repeats allowed.
 type List struct {
 	Items []Value
-	Notes *Notes // how the list is shown, or nil
+	Notes *Notes   // how the list is shown, or nil
+	Heads []string // what the places of its tuples are, as written; may be nil
 }
 
 // Notes turn the display of a list into a table: one row for each item.

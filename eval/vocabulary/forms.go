@@ -214,6 +214,9 @@ func tableOf(c *value.Context, v value.Value) (*display.Table, error) {
 			return nil, err
 		}
 		rowsOf(n, items)
+		if l, ok := v.(value.List); ok && len(l.Heads) == len(n.Heads) && len(items) > 0 && rowOf(items[0]) != nil {
+			n.Heads = l.Heads
+		}
 	default:
 		return nil, algebra.Errorf(algebra.Invalid, "%s has no form as a table", v.Kind())
 	}
