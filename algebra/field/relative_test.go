@@ -16,14 +16,7 @@ func TestRelative(t *testing.T) {
 	r := seeded(t, 104)
 	for name, L := range samples(w) {
 		for _, d := range integer.DivisorsInt(L.AbsoluteDegree()) {
-			K := standard(w, 2, 1)
-			if L.Characteristic().IsInt64() {
-				K = standard(w, L.Characteristic().Int64(), d)
-			} else if d == 1 {
-				K = L.PrimeField()
-			} else {
-				continue
-			}
+			K := must(field.Standard(w, L.Characteristic(), d))
 			m := must(field.Embed(w, K, L))
 			q, n := K.Order(), L.AbsoluteDegree()/d
 			for range 4 {

@@ -309,7 +309,11 @@ func stepPolynomial(w *algebra.Work, K *Field, l int) *poly.Poly {
 		A.SetCoeff(f, 0, a.Neg().w)
 	case new(big.Int).Mod(K.prime.units(), big.NewInt(int64(l))).Sign() == 0:
 		e := new(big.Int).Div(K.units(), big.NewInt(int64(l)))
-		for c := big.NewInt(2); ; c.Add(c, big.NewInt(1)) {
+		c := big.NewInt(2)
+		if !K.IsPrime() {
+			c.Set(p) // all elements of F_p are l-th powers in K
+		}
+		for ; ; c.Add(c, big.NewInt(1)) {
 			if a := K.Element(c); !a.power(w, e).IsOne() {
 				A.SetCoeff(f, 0, a.Neg().w)
 				return f
