@@ -8,6 +8,8 @@ nbconvert into the folder OUT.
 """
 
 import copy
+import difflib
+import json
 import pathlib
 import sys
 
@@ -31,6 +33,11 @@ def outputs(notebook):
     return cells
 
 
+def text(cell):
+    """The outputs of a cell as lines, for a diff."""
+    return [line for output in cell for line in json.dumps(output, indent=1, sort_keys=True).splitlines()]
+
+
 def main(out, paths):
     failed = False
     for path in map(pathlib.Path, paths):
@@ -44,7 +51,9 @@ def main(out, paths):
         for number, (want, got) in enumerate(zip(outputs(stored), outputs(fresh)), 1):
             if want != got:
                 failed = True
-                print(f"{path.name}: the outputs of code cell {number} differ\n--- stored\n{want}\n--- fresh\n{got}")
+                print(f"{path.name}: the outputs of code cell {number} differ")
+                for line in difflib.unified_diff(text(want), text(got), "stored", "fresh", n=0, lineterm=""):
+                    print("   ", line[:200])
         html, _ = nbconvert.HTMLExporter().from_notebook_node(fresh)
         if "<table" not in html or "data:image/svg+xml" not in html:
             failed = True
