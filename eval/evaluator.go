@@ -3,6 +3,7 @@ package eval
 import (
 	"fmt"
 	"math/big"
+	"slices"
 	"strings"
 
 	"adjoin/algebra"
@@ -352,6 +353,13 @@ func (c *cell) index(x *lang.Index) (value.Value, error) {
 
 func (c *cell) comprehension(x *lang.Comprehension) (value.Value, error) {
 	var items []value.Value
+	var wrote *value.Written
+	if t, ok := x.X.(*lang.Tuple); ok {
+		wrote = new(value.Written)
+		for _, place := range t.Items {
+			wrote.Heads = append(wrote.Heads, lang.Print(place))
+		}
+	}
 	outer := c.scope
 	defer func() { c.scope = outer }()
 	var run func(k int) error
@@ -363,7 +371,7 @@ func (c *cell) comprehension(x *lang.Comprehension) (value.Value, error) {
 					return err
 				}
 			}
-			v, err := c.plain(x.X)
+			v, err := c.member(x.X, wrote)
 			if err != nil {
 				return err
 			}
@@ -407,12 +415,32 @@ func (c *cell) comprehension(x *lang.Comprehension) (value.Value, error) {
 		return value.NewSet(c.ctx, items)
 	}
 	list := value.List{Items: items}
-	if t, ok := x.X.(*lang.Tuple); ok {
-		for _, place := range t.Items {
-			list.Heads = append(list.Heads, lang.Print(place))
-		}
-	}
+	list.Wrote = wrote
 	return list, nil
+}
+
+// member is one item of a comprehension. Where it is a tuple some of whose
+// places choose a form, the forms are kept aside for a table.
+func (c *cell) member(x lang.Expr, wrote *value.Written) (value.Value, error) {
+	t, ok := x.(*lang.Tuple)
+	if !ok || !slices.ContainsFunc(t.Items, choosesForm) {
+		return c.plain(x)
+	}
+	row, plain := make([]value.Value, len(t.Items)), make([]value.Value, len(t.Items))
+	for i, place := range t.Items {
+		v, err := c.eval(place)
+		if err != nil {
+			return nil, err
+		}
+		row[i], plain[i] = v, value.Plain(v)
+	}
+	wrote.Rows = append(wrote.Rows, row)
+	return value.Tuple{Items: plain}, nil
+}
+
+func choosesForm(x lang.Expr) bool {
+	_, ok := x.(*lang.As)
+	return ok
 }
 
 // bindAll binds one name to a value, or several to the parts of it.

@@ -13,7 +13,14 @@ import (
 type List struct {
 	Items []Value
 	Notes *Notes   // how the list is shown, or nil
-	Heads []string // what the places of its tuples are, as written; may be nil
+	Wrote *Written // how its tuples were written, or nil
+}
+
+// Written is how the tuples of a list were written: the text of each place
+// and, where one of them chose a form, the rows with their forms.
+type Written struct {
+	Heads []string
+	Rows  [][]Value
 }
 
 // Notes turn the display of a list into a table: one row for each item.
@@ -354,7 +361,9 @@ func (n *Notes) table(p *Printer) display.Table {
 }
 
 func cell(p *Printer, v Value) display.Cell {
-	v = Plain(v)
+	if s, ok := v.(Shown); ok {
+		return s.cell(p)
+	}
 	text := itemText(p, v)
 	if o, ok := v.(overRing); ok { // the caption says where they live
 		text, _ = o.overText(p)

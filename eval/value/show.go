@@ -14,6 +14,30 @@ type Shown struct {
 	Value
 	Form display.Document
 	Name string // the form, as written
+	Note string // what the form says of its order, which stands at the end of its text
+}
+
+// comment is what stands before a note in a text.
+const comment = "  # "
+
+// Noted is v shown as a text and, behind it, a note on how to read it.
+func Noted(v Value, name, text, note string) Shown {
+	form := display.Text{Text: text}
+	if note != "" {
+		form.Text += comment + note
+	}
+	return Shown{Value: Plain(v), Form: form, Name: name, Note: note}
+}
+
+// cell is the form in a table, which has its note below.
+func (s Shown) cell(p *Printer) display.Cell {
+	switch f := s.Form.(type) {
+	case display.Text:
+		return display.Cell{Text: strings.TrimSuffix(f.Text, comment+s.Note)}
+	case display.Formula:
+		return display.Cell{Text: f.Text, TeX: f.TeX}
+	}
+	return cell(p, s.Value)
 }
 
 // Text is the text of the value: a form never changes what the value is.

@@ -55,7 +55,7 @@ var forms = []Entry{
 					list = append(list, fmt.Sprint(i))
 				}
 			}
-			return shown(a[0], "exponents", display.Text{Text: "(" + strings.Join(list, ", ") + ")  # exponents of " + letter}), nil
+			return value.Noted(a[0], "exponents", "("+strings.Join(list, ", ")+")", "exponents of "+letter), nil
 		}}},
 		Examples: []Example{{"x^3 + 1 over F_2 as exponents", "(3, 0)"}},
 	},
@@ -214,14 +214,31 @@ func tableOf(c *value.Context, v value.Value) (*display.Table, error) {
 			return nil, err
 		}
 		rowsOf(n, items)
-		if l, ok := v.(value.List); ok && len(l.Heads) == len(n.Heads) && len(items) > 0 && rowOf(items[0]) != nil {
-			n.Heads = l.Heads
+		if l, ok := v.(value.List); ok && l.Wrote != nil && len(l.Wrote.Heads) == len(n.Heads) && len(items) > 0 && rowOf(items[0]) != nil {
+			asWritten(n, l.Wrote)
 		}
 	default:
 		return nil, algebra.Errorf(algebra.Invalid, "%s has no form as a table", v.Kind())
 	}
 	t := n.Table(c.Printer())
 	return &t, nil
+}
+
+// asWritten heads the columns with what their places were written as, and
+// shows the cells in the forms that were chosen there, with their notes below.
+func asWritten(n *value.Notes, w *value.Written) {
+	n.Heads = w.Heads
+	if w.Rows == nil {
+		return
+	}
+	n.Rows = w.Rows
+	var notes []string
+	for j, v := range w.Rows[0] {
+		if s, ok := v.(value.Shown); ok && s.Note != "" {
+			notes = append(notes, w.Heads[j]+": "+s.Note)
+		}
+	}
+	n.Note = strings.Join(notes, "; ")
 }
 
 // rowsOf makes rows of tuples or lists of one length, of elements of a field,
@@ -297,10 +314,11 @@ func numeral(name, format, prefix, example string) Entry {
 			if err != nil {
 				return nil, err
 			}
+			note := ""
 			if letter != "" {
-				t += "  # bit i, counted from the right and from 0, is the coefficient of " + letter + "^i"
+				note = "bit i, counted from the right and from 0, is the coefficient of " + letter + "^i"
 			}
-			return shown(a[0], name, display.Text{Text: t}), nil
+			return value.Noted(a[0], name, t, note), nil
 		}}},
 		Examples: []Example{{"x^8 + x^4 + x^3 + x + 1 over F_2 as " + name, example}},
 	}
