@@ -144,14 +144,27 @@ func (l Lattice) Diagram(p *Printer) display.Diagram {
 // widest generator that is written out at a node, in characters.
 const labelWidth = 24
 
+// generatorLabel is the generator at a node. Where one of the fields between
+// has a generator too wide to write out, they all show their standard ones, so
+// that the labels are of one kind.
 func (l Lattice) generatorLabel(p *Printer, i int) string {
-	if s := elementText(p, l.Subs[i].Generator); len(s) <= labelWidth {
-		return s
-	}
-	if K := l.Subs[i].Field; K.IsStandard() {
+	s := elementText(p, l.Subs[i].Generator)
+	if K := l.Subs[i].Field; i < len(l.Subs)-1 && K.IsStandard() && l.wide(p) {
 		return generatorText(K)
 	}
-	return elementText(p, l.Subs[i].Generator)[:labelWidth-4] + " ..."
+	if len(s) > labelWidth {
+		return s[:labelWidth-4] + " ..."
+	}
+	return s
+}
+
+func (l Lattice) wide(p *Printer) bool {
+	for _, s := range l.Subs[:len(l.Subs)-1] {
+		if len(elementText(p, s.Generator)) > labelWidth {
+			return true
+		}
+	}
+	return false
 }
 
 // shortName names a field at a node: by its name in the session or its order.
