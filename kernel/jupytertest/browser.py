@@ -33,7 +33,8 @@ def main(chromium, port, token, out, notebooks):
             page = browser.new_context(viewport={"width": 1100, "height": 1000}).new_page()
             page.goto(f"http://127.0.0.1:{port}/lab/tree/{notebook}?token={token}&reset", timeout=90_000)
             page.wait_for_selector(".jp-Notebook .jp-CodeCell", timeout=90_000)
-            page.wait_for_selector(".jp-Notebook-ExecutionIndicator[data-status='idle']", timeout=90_000)
+            # Until the kernel is there, running a cell asks which one to start.
+            page.locator("#jp-main-statusbar", has_text="Adjoin | Idle").wait_for(timeout=90_000)
             page.keyboard.press("Control+b")  # without the list of files
             page.click(".jp-Notebook .jp-Cell >> nth=0")
             page.get_by_role("menuitem", name="Run", exact=True).click()
