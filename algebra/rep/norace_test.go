@@ -1,0 +1,5 @@
+//go:build !race
+
+package rep_test
+
+const raceDetector = false
