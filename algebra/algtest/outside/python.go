@@ -19,6 +19,9 @@ import (
 // packages may ask at once: one makes it, the others wait.
 func Python(t testing.TB, requirements string) string {
 	t.Helper()
+	if testing.Short() && !required() {
+		t.Skip("runs Python; not in short mode")
+	}
 	text, err := os.ReadFile(requirements)
 	if err != nil {
 		t.Fatal(err)
