@@ -35,7 +35,7 @@ func (s Shown) cell(p *Printer) display.Cell {
 	case display.Text:
 		return display.Cell{Text: strings.TrimSuffix(f.Text, comment+s.Note)}
 	case display.Formula:
-		return display.Cell{Text: f.Text, TeX: f.TeX}
+		return display.Cell(f)
 	}
 	return cell(p, s.Value)
 }
