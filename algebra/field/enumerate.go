@@ -6,6 +6,7 @@ import (
 
 	"adjoin/algebra"
 	"adjoin/algebra/integer"
+	"adjoin/algebra/poly"
 )
 
 // References:
@@ -18,7 +19,7 @@ import (
 func IrreduciblePolynomials(w *algebra.Work, K *Field, n int) iter.Seq[Polynomial] {
 	return func(yield func(Polynomial) bool) {
 		for f := range monic(w, K, n) {
-			if f.IsIrreducible(w).Holds && !yield(f) {
+			if poly.Irreducible(w, K.arith, f.f) && !yield(f) {
 				return
 			}
 		}
@@ -34,6 +35,9 @@ func PrimitivePolynomials(w *algebra.Work, K *Field, n int) (iter.Seq[Polynomial
 	}
 	return func(yield func(Polynomial) bool) {
 		for f := range monic(w, K, n) {
+			if !poly.Irreducible(w, K.arith, f.f) {
+				continue
+			}
 			if v, err := f.IsPrimitive(w); err == nil && v.Holds && !yield(f) {
 				return
 			}

@@ -37,8 +37,13 @@ import (
 //     in K [LN, theorem 3.75]. (l divides q-1 only if it divides p-1, since
 //     the order of p modulo l is a power of l then.)
 //
-//     otherwise: x^l + x t(x) + g, irreducible over K, with the polynomial t
-//     over K, not 0, of least code sum Code(t_i) q^i.
+//     otherwise: x^l + x t(x) + g, irreducible over K, with a polynomial t of
+//     degree at most l-2 over K, not 0: of those whose coefficients have codes
+//     below B, the one of least code sum Code(t_i) q^i, and B the least power
+//     of 2 for which there is one. (Without B, t would run through the
+//     constants first; but where all x^l + c x + g have a discriminant of the
+//     same kind, by a theorem of Stickelberger none of them may be
+//     irreducible.)
 //
 //     Between K and F_{p^n} there is no field, and between F_p and F_{p^n} there
 //     are only those below K; so g_n generates F_{p^n} over F_p.
@@ -320,18 +325,43 @@ func stepPolynomial(w *algebra.Work, K *Field, l int) *poly.Poly {
 			}
 		}
 	default:
-		t, x := new(poly.Poly), poly.X(A)
 		A.SetCoeff(f, 0, K.Generator().w)
-		for c := big.NewInt(1); ; c.Add(c, big.NewInt(1)) {
-			decode(t, A, c)
-			A.Mul(w, t, t, x)
-			A.Add(t, t, f)
-			if poly.IsIrreducible(w, A, t).Holds {
+		for bound := 2; ; bound *= 2 {
+			if t := search(w, A, f, bound); t != nil {
 				return t
 			}
 		}
 	}
 	return f
+}
+
+// search is the first irreducible f + x t, for f = x^l + g and the polynomials
+// t, not 0, of degree at most l-2 whose coefficients have codes below bound,
+// in the order of their codes; nil if there is none.
+func search(w *algebra.Work, A poly.Arith, f *poly.Poly, bound int) *poly.Poly {
+	t, e, code := poly.Clone(f), make(poly.Elem, A.Width()), new(big.Int)
+	if b := A.Order(); b.IsInt64() && b.Int64() < int64(bound) {
+		bound = int(b.Int64())
+	}
+	digits := make([]int, f.Degree()) // of t, at the exponents 1, ..., l-1
+	for {
+		w.Poll()
+		i := 1
+		for ; i < len(digits); i++ {
+			digits[i] = (digits[i] + 1) % bound
+			A.FromCode(e, code.SetInt64(int64(digits[i])))
+			A.SetCoeff(t, i, e)
+			if digits[i] > 0 {
+				break
+			}
+		}
+		if i == len(digits) {
+			return nil
+		}
+		if poly.Irreducible(w, A, t) {
+			return t
+		}
+	}
 }
 
 // decode sets t to the polynomial of code c: sum Code(t_i) q^i = c.

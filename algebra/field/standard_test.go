@@ -79,31 +79,16 @@ func TestOrderOfCreation(t *testing.T) {
 // sentences read.
 func TestRule(t *testing.T) {
 	w := algebra.NewWork(nil)
-	one := big.NewInt(1)
-	// From F_p, l neither p nor a divisor of p - 1: x^l + x t(x) + 1 with the
-	// t of least code.
-	for _, c := range []struct {
-		p int64
-		n int
-	}{{2, 53}, {2, 61}, {2, 127}, {1009, 11}, {1013, 13}} {
-		F := standard(w, c.p, 1)
-		for code := big.NewInt(1); ; code.Add(code, one) {
-			f := field.FromCode(F, code).Shift(1).Add(field.FromInts(F, 1))
-			f = f.Add(field.FromInts(F, 1).Shift(c.n))
-			if f.IsIrreducible(w).Holds {
-				if K := standard(w, c.p, c.n); !K.Modulus().Equal(f) {
-					t.Errorf("p = %d, n = %d: %s, not %s", c.p, c.n, K.Modulus(), f)
-				}
-				break
-			}
-		}
+	// From F_p, l neither p nor a divisor of p - 1.
+	for _, c := range []struct{ p, n int }{{2, 53}, {2, 61}, {2, 127}, {1009, 11}, {1013, 13}, {5, 23}} {
+		checkStep(t, w, c.p, c.n, c.n)
 	}
 	// l = p from F_p and from F_(p^(p^i)).
 	for _, c := range []struct{ p, n int }{{53, 53}, {2, 64}, {3, 81}, {5, 25}} {
 		checkStep(t, w, c.p, c.n, c.p)
 	}
 	// l | p - 1, and the general step above F_p.
-	for _, c := range []struct{ p, n, l int }{{1009, 4, 2}, {1009, 9, 3}, {3, 32, 2}, {2, 81, 3}, {2, 49, 7}, {11, 27, 3}} {
+	for _, c := range []struct{ p, n, l int }{{1009, 4, 2}, {1009, 9, 3}, {3, 32, 2}, {2, 81, 3}, {2, 49, 7}, {2, 125, 5}, {11, 27, 3}} {
 		checkStep(t, w, c.p, c.n, c.l)
 	}
 	// Composite degrees: the generator is the sum of the generators of prime
@@ -162,14 +147,26 @@ func checkStep(t *testing.T, w *algebra.Work, p, n, l int) {
 			}
 		}
 	default:
-		// x^l + x t(x) + g with the t of least code.
-		for code := big.NewInt(1); ; code.Add(code, big.NewInt(1)) {
-			want := field.FromCode(K, code).Shift(1).Add(field.NewPolynomial(K, []field.Elem{g})).Add(field.FromInts(K, 1).Shift(l))
-			if want.IsIrreducible(w).Holds {
-				if !f.Equal(want) {
-					t.Errorf("%s, not %s", name, want)
+		// x^l + x t(x) + g with the first t by bound and code.
+		for bound := int64(2); ; bound *= 2 {
+			bound = min(bound, K.Order().Int64())
+			number := big.NewInt(1)
+			for range l - 1 {
+				number.Mul(number, big.NewInt(bound))
+			}
+			for i := big.NewInt(1); i.Cmp(number) < 0; i.Add(i, big.NewInt(1)) {
+				want := field.FromInts(K, 1).Shift(l).Add(field.NewPolynomial(K, []field.Elem{g}))
+				rest, digit := new(big.Int).Set(i), new(big.Int)
+				for k := 1; rest.Sign() > 0; k++ {
+					rest.QuoRem(rest, big.NewInt(bound), digit)
+					want = want.Add(field.NewPolynomial(K, []field.Elem{K.Element(digit)}).Shift(k))
 				}
-				return
+				if want.IsIrreducible(w).Holds {
+					if !f.Equal(want) {
+						t.Errorf("%s, not %s", name, want)
+					}
+					return
+				}
 			}
 		}
 	}

@@ -50,6 +50,20 @@ func IsIrreducible(w *algebra.Work, A Arith, f *Poly) Irreducibility {
 	return Irreducibility{Factor: g, Multiplicity: e}
 }
 
+// Irreducible is the answer of IsIrreducible without its reasons: a search
+// among many polynomials does not ask for the factors of those it passes by.
+func Irreducible(w *algebra.Work, A Arith, f *Poly) bool {
+	switch n := f.Degree(); {
+	case n < 1:
+		return false
+	case n == 1:
+		return true
+	default:
+		f, _ = Monic(w, A, f)
+		return irreducible(w, A, f, primesOf(n))
+	}
+}
+
 func irreducible(w *algebra.Work, A Arith, f *Poly, primes []int) bool {
 	n := f.Degree()
 	if IsZeroElem(Coeff(A, f, 0)) || IsZeroElem(Eval(w, A, f, A.One())) {

@@ -138,7 +138,7 @@ func (s *search) less(f, g *poly.Poly) bool {
 
 // isConway says whether f is primitive and compatible with those below.
 func (s *search) isConway(f *poly.Poly) bool {
-	if !poly.IsIrreducible(s.w, s.F, f).Holds {
+	if !poly.Irreducible(s.w, s.F, f) {
 		return false
 	}
 	for m, c := range s.below {
