@@ -140,3 +140,31 @@ func isKind(err error, kind algebra.Kind) bool {
 	e, ok := err.(*algebra.Error)
 	return ok && e.Kind == kind
 }
+
+// TestInterrupt checks that a pulled brake gives an error and never an answer,
+// and that nothing half-made is remembered.
+func TestInterrupt(t *testing.T) {
+	stop := new(algebra.Stop)
+	stopped, w := algebra.NewWork(stop), algebra.NewWork(nil)
+	stop.Pull(algebra.Errorf(algebra.Interrupted, "interrupted"))
+	if _, err := field.Standard(stopped, big.NewInt(13), 210); !isKind(err, algebra.Interrupted) {
+		t.Errorf("Standard: %v", err)
+	}
+	K := above(w, standard(w, 13, 1), "a", 12, 170)
+	if _, err := field.Subfields(stopped, K); !isKind(err, algebra.Interrupted) {
+		t.Errorf("Subfields: %v", err)
+	}
+	err := func() (err error) {
+		defer algebra.Catch(&err)
+		K.Generator().InSubfield(stopped, standard(w, 13, 6))
+		return nil
+	}()
+	if !isKind(err, algebra.Interrupted) {
+		t.Errorf("InSubfield: %v", err)
+	}
+	for _, L := range []*field.Field{standard(w, 13, 210), K} {
+		if n := len(must(field.Subfields(w, L))); n != 16 && n != 6 {
+			t.Errorf("%d subfields afterwards", n)
+		}
+	}
+}

@@ -133,7 +133,7 @@ func (f Polynomial) IsPrimitive(w *algebra.Work) (v algebra.Verdict, err error) 
 	fac := integer.FactorPower(w, f.k.p, f.k.absolute*n)
 	size := orderText(f.k.p, f.k.absolute*n)
 	source := "R. Lidl and H. Niederreiter, Finite Fields, 1997, theorem 3.16"
-	e := algebra.Evidence{Standing: fac.Standing, Source: source}
+	e := algebra.Evidence{Standing: algebra.Weakest(fac.Standing, f.k.standing.Standing), Source: source}
 	e = e.With("factorization of "+size+" - 1", factorText(u, fac))
 	for _, q := range fac.Primes {
 		w.Poll()

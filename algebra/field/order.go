@@ -50,7 +50,7 @@ func (a Elem) Order(w *algebra.Work) (n *big.Int, e algebra.Evidence, err error)
 		}
 	}
 	e = algebra.Evidence{
-		Standing: f.Standing,
+		Standing: algebra.Weakest(f.Standing, a.k.standing.Standing),
 		Reason:   fmt.Sprintf("a^n = 1, and a^(n/r) is not 1 for any prime r that divides n; n divides %s - 1", orderText(a.k.p, d)),
 		Source:   "R. Lidl and H. Niederreiter, Finite Fields, 1997, section 2.1",
 	}
@@ -68,7 +68,7 @@ func (a Elem) IsPrimitive(w *algebra.Work) (v algebra.Verdict, err error) {
 	}
 	f, n := a.k.Units(w), a.k.units()
 	source := "R. Lidl and H. Niederreiter, Finite Fields, 1997, section 2.1"
-	e := algebra.Evidence{Standing: f.Standing, Source: source}
+	e := algebra.Evidence{Standing: algebra.Weakest(f.Standing, a.k.standing.Standing), Source: source}
 	e = e.With("factorization of "+a.k.orderText()+" - 1", factorText(n, f))
 	for _, q := range f.Primes {
 		w.Poll()

@@ -146,13 +146,26 @@ func (a Elem) CharacteristicPolynomial(w *algebra.Work, K *Field) (Polynomial, e
 }
 
 // InSubfield is a as an element of K, if it lies there: a and K meet as Common
-// says, and K need not be below the field of a.
+// says, and K need not be below the field of a. In another characteristic it
+// does not. Where Common fails for another reason, such as an interrupt, it
+// unwinds: that is no answer.
 func (a Elem) InSubfield(w *algebra.Work, K *Field) (x Elem, ok bool) {
-	_, f, g, err := Common(w, a.k, K)
-	if err != nil {
+	if a.k.p.Cmp(K.p) != 0 {
 		return Elem{}, false
 	}
+	_, f, g, err := Common(w, a.k, K)
+	if err != nil {
+		algebra.Fail(asError(err))
+	}
 	return g.Preimage(w, f.Apply(w, a))
+}
+
+// asError is err as what algebra.Fail takes.
+func asError(err error) *algebra.Error {
+	if e, ok := err.(*algebra.Error); ok {
+		return e
+	}
+	return algebra.Errorf(algebra.Invalid, "%s", err)
 }
 
 // Degree is the degree of a over the subfield K.
