@@ -4,14 +4,16 @@ import (
 	"fmt"
 
 	"adjoin/algebra/field"
+	"adjoin/algebra/order"
 	"adjoin/eval/display"
 )
 
 // Lattice is the ordered set of the fields between K and L, for finite fields:
 // one for each divisor of [L : K].
 type Lattice struct {
-	Of   Extension
-	Subs []Subfields // by ascending degree
+	Of    Extension
+	Subs  []Subfields  // by ascending degree
+	Order *order.Order // of Subs, by inclusion
 }
 
 // Subfields is one intermediate field: in its standard presentation, with the
@@ -45,7 +47,8 @@ func NewLattice(c *Context, e Extension) (Lattice, error) {
 		}
 		l.Subs = append(l.Subs, f)
 	}
-	return l, nil
+	l.Order, err = order.New(c.W, len(l.Subs), func(i, j int) bool { return l.degree(j)%l.degree(i) == 0 })
+	return l, err
 }
 
 // ownGenerator takes the generator that the field was given with, if it
@@ -74,7 +77,7 @@ func (l Lattice) Canonical() (string, map[string]any) {
 			"field": machineField(s.Field), "generator": machineCoefficients([]field.Elem{s.Generator})[0],
 			"minimal polynomial": machineCoefficients(s.Minimal.Coefficients()),
 		})
-		for _, j := range l.covers(i) {
+		for _, j := range l.Order.UpperCovers(i) {
 			edges = append(edges, map[string]any{"from": i, "to": j, "degree": l.degree(j) / l.degree(i)})
 		}
 	}
@@ -82,37 +85,6 @@ func (l Lattice) Canonical() (string, map[string]any) {
 }
 
 func (l Lattice) degree(i int) int { return l.Subs[i].Field.AbsoluteDegree() }
-
-// covers lists the fields directly above the i-th: those of prime degree.
-func (l Lattice) covers(i int) []int {
-	var list []int
-	for j := range l.Subs {
-		if r := l.degree(j) / l.degree(i); l.degree(j)%l.degree(i) == 0 && isPrimeInt(r) {
-			list = append(list, j)
-		}
-	}
-	return list
-}
-
-func isPrimeInt(n int) bool {
-	for d := 2; d*d <= n; d++ {
-		if n%d == 0 {
-			return false
-		}
-	}
-	return n > 1
-}
-
-// primeFactors counts the prime factors of n, with multiplicity.
-func primeFactors(n int) int {
-	k := 0
-	for d := 2; n > 1; d++ {
-		for ; n%d == 0; n /= d {
-			k++
-		}
-	}
-	return k
-}
 
 // Document is the Hasse diagram: degrees on the edges, a generator at every
 // field.
@@ -127,14 +99,14 @@ func (l Lattice) Diagram(p *Printer) display.Diagram {
 	for i, s := range l.Subs {
 		n := display.Node{
 			ID: fmt.Sprint(l.degree(i)), Label: shortName(p, s.Field),
-			Rank: primeFactors(l.degree(i) / l.degree(0)),
+			Rank: l.Order.Rank(i),
 			Emph: i == 0 || i == len(l.Subs)-1,
 		}
 		if !s.Field.IsPrime() {
 			n.Sub = l.generatorLabel(p, i)
 		}
 		d.Nodes = append(d.Nodes, n)
-		for _, j := range l.covers(i) {
+		for _, j := range l.Order.UpperCovers(i) {
 			d.Edges = append(d.Edges, display.Edge{From: fmt.Sprint(l.degree(i)), To: fmt.Sprint(l.degree(j)), Label: fmt.Sprint(l.degree(j) / l.degree(i))})
 		}
 	}

@@ -12,7 +12,7 @@ var groups = []Entry{
 		Source:  "R. Lidl and H. Niederreiter, Finite Fields, 1997, theorem 2.21",
 		Cases: []Case{
 			{Args: []Arg{{Prep: "of", Kind: Extension}}, Do: func(c *value.Context, a []value.Value) (value.Value, error) {
-				return value.NewGroup(a[0].(value.Extension)), nil
+				return value.NewGroup(c, a[0].(value.Extension))
 			}},
 			{Args: ofPolynomial, Over: true, Do: func(c *value.Context, a []value.Value) (value.Value, error) {
 				f, err := finitePolynomial(a[0])
@@ -27,7 +27,7 @@ var groups = []Entry{
 				if err != nil {
 					return nil, err
 				}
-				return value.NewGroup(e.(value.Extension)), nil
+				return value.NewGroup(c, e.(value.Extension))
 			}},
 		},
 		Examples: []Example{{"order of Gal(F_{2^12}/F_4)", "6"}, {"Gal(F_64/F_4)", "Gal(F_64/F_4)"}},
