@@ -1,6 +1,7 @@
 package main
 
 import (
+	"bytes"
 	"errors"
 	"fmt"
 	"io"
@@ -59,10 +60,11 @@ func readStatement(s *eval.Session, lines *pastLines) (string, error) {
 		return "", err
 	}
 	defer func() { _ = term.Restore(fd, old) }()
+	keys := &keyboard{in: os.Stdin}
 	t := term.NewTerminal(struct {
 		io.Reader
 		io.Writer
-	}{os.Stdin, os.Stdout}, prompt)
+	}{keys, os.Stdout}, prompt)
 	t.History = lines
 	if w, h, err := term.GetSize(fd); err == nil && w > 0 {
 		_ = t.SetSize(w, h)
@@ -79,6 +81,9 @@ func readStatement(s *eval.Session, lines *pastLines) (string, error) {
 		if err != nil && !errors.Is(err, term.ErrPasteIndicator) {
 			return "", err
 		}
+		if keys.abandoned {
+			return "", nil
+		}
 		text += line
 		c := s.IsComplete(text)
 		if c.Status != lang.Incomplete || strings.TrimSpace(line) == "" && text != "" {
@@ -87,6 +92,33 @@ func readStatement(s *eval.Session, lines *pastLines) (string, error) {
 		text += "\n"
 		t.SetPrompt(onward + c.Indent)
 	}
+}
+
+// keyboard turns Ctrl-C, which would end the session, into what a terminal's
+// user means by it: the statement is abandoned and its line is emptied.
+type keyboard struct {
+	in        io.Reader
+	waiting   []byte
+	abandoned bool
+}
+
+const (
+	ctrlC     = 3
+	emptyLine = "\x05\x15\r" // to the end, cut to the start, enter
+)
+
+func (k *keyboard) Read(p []byte) (int, error) {
+	if len(k.waiting) == 0 {
+		n, err := k.in.Read(p)
+		if err != nil || bytes.IndexByte(p[:n], ctrlC) < 0 {
+			return n, err
+		}
+		k.abandoned = true
+		k.waiting = []byte(emptyLine)
+	}
+	n := copy(p, k.waiting)
+	k.waiting = k.waiting[n:]
+	return n, nil
 }
 
 // complete completes the word before the cursor as far as there is only one

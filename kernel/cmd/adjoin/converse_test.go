@@ -3,6 +3,7 @@ package main
 import (
 	"bytes"
 	"context"
+	"io"
 	"strings"
 	"testing"
 
@@ -53,5 +54,26 @@ func TestCommonPrefix(t *testing.T) {
 		if got := commonPrefix(c[0], c[1]); got != c[2] {
 			t.Errorf("%s %s: %q", c[0], c[1], got)
 		}
+	}
+}
+
+func TestCtrlCAbandonsTheLine(t *testing.T) {
+	keys := &keyboard{in: strings.NewReader("6*7\x03")}
+	var screen bytes.Buffer
+	terminal := term.NewTerminal(struct {
+		io.Reader
+		io.Writer
+	}{keys, &screen}, "")
+	line, err := terminal.ReadLine()
+	if line != "" || err != nil || !keys.abandoned {
+		t.Errorf("%q %v, abandoned: %v", line, err, keys.abandoned)
+	}
+	keys = &keyboard{in: strings.NewReader("6*7\r")}
+	terminal = term.NewTerminal(struct {
+		io.Reader
+		io.Writer
+	}{keys, &screen}, "")
+	if line, err := terminal.ReadLine(); line != "6*7" || err != nil || keys.abandoned {
+		t.Errorf("%q %v, abandoned: %v", line, err, keys.abandoned)
 	}
 }
