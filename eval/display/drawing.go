@@ -136,7 +136,7 @@ func (d Diagram) boxes() []box {
 			w = max(w, runsWidth(b.sub, subSize))
 		}
 		if twoLines {
-			b.height += subSize * 1.25
+			b.height += subSize*1.25 + 5
 		}
 		b.width = max(leastWidth, math.Ceil(float64(w*1.06)+2*padX))
 		boxes[i] = b
@@ -195,7 +195,7 @@ func levelHeights(g *grid, x []float64, height float64) []float64 {
 		if steps > 10 {
 			gap += 8
 		}
-		y[r] = y[r-1] + height + math.Ceil(min(gap, 120))
+		y[r] = y[r-1] + height + math.Ceil(min(gap, 170))
 	}
 	return y
 }

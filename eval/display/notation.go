@@ -2,6 +2,7 @@ package display
 
 import (
 	"fmt"
+	"slices"
 	"strings"
 	"unicode"
 	"unicode/utf8"
@@ -29,7 +30,7 @@ func runs(s string) []run {
 }
 
 // proseRuns reads a sentence that has formulas in it: as runs, but a single
-// letter stays upright, since it may be a word.
+// letter is a variable only when it bears a script, since it may be a word.
 func proseRuns(s string) []run {
 	p := notationParser{}
 	p.read(visible(s), "")
@@ -59,14 +60,14 @@ var signs = []struct{ written, shown string }{
 func (p *notationParser) read(s, path string) {
 	for len(s) > 0 {
 		if (s[0] == '^' || s[0] == '_') && len(path) < deepest && len(p.out) > 0 {
-			if script, rest, ok := scriptOf(s[1:]); ok {
+			if script, rest, ok := chainOf(s[0], s[1:]); ok {
 				p.read(script, path+s[:1])
 				s = rest
 				continue
 			}
 		}
 		if n := lettersAt(s); n > 0 {
-			p.put(s[:n], p.letters && utf8.RuneCountInString(s[:n]) == 1, path)
+			p.put(s[:n], utf8.RuneCountInString(s[:n]) == 1 && (p.letters || path != "" || bearsScript(s[n:])), path)
 			s = s[n:]
 			continue
 		}
@@ -81,6 +82,14 @@ func (p *notationParser) read(s, path string) {
 		p.put(shown, false, path)
 		s = s[n:]
 	}
+}
+
+func bearsScript(s string) bool {
+	if s == "" || s[0] != '^' && s[0] != '_' {
+		return false
+	}
+	_, _, ok := scriptOf(s[1:])
+	return ok
 }
 
 func sign(s string) (shown string, n int) {
@@ -99,6 +108,21 @@ func lettersAt(s string) int {
 		}
 	}
 	return len(s)
+}
+
+// chainOf is scriptOf for what follows mark, where a script may bear a script
+// of the same kind: x^2^3 is x^(2^3).
+func chainOf(mark byte, s string) (script, rest string, ok bool) {
+	script, rest, ok = scriptOf(s)
+	if ok && rest != "" && rest[0] == mark {
+		if upper, beyond, more := chainOf(mark, rest[1:]); more {
+			if s[0] == '(' {
+				script = "(" + script + ")"
+			}
+			return script + string(mark) + "{" + upper + "}", beyond, true
+		}
+	}
+	return script, rest, ok
 }
 
 // scriptOf splits what follows ^ or _ into the script and the rest: a group in
@@ -177,7 +201,9 @@ func runsHTML(list []run) string {
 }
 
 // notationTeX is a label as the inside of a formula.
-func notationTeX(s string) string {
+func notationTeX(s string) string { return runsTeX(runs(s)) }
+
+func runsTeX(list []run) string {
 	var b strings.Builder
 	path := ""
 	move := func(to string) {
@@ -191,34 +217,43 @@ func notationTeX(s string) string {
 		}
 		path = to
 	}
-	last := ""
-	for _, r := range runs(s) {
-		if r.path == last && r.path != "" && b.Len() == 0 {
-			b.WriteString("{}")
-		}
+	for i, r := range list {
 		move(r.path)
-		b.WriteString(mathText(r))
-		last = r.path
+		var before, after rune
+		if i > 0 {
+			before, _ = utf8.DecodeLastRuneInString(list[i-1].text)
+		}
+		if i+1 < len(list) && list[i+1].path == r.path {
+			after, _ = utf8.DecodeRuneInString(list[i+1].text)
+		}
+		mathText(&b, r.text, before, after)
 	}
 	move("")
 	return b.String()
 }
 
-// mathText is a run of one style in a formula.
-func mathText(r run) string {
-	var b strings.Builder
-	s := r.text
-	for len(s) > 0 {
-		if n := lettersAt(s); n > 0 {
-			b.WriteString(mathWord(s[:n]))
-			s = s[n:]
+// mathText writes text as part of a formula, between two neighbours. A formula
+// spaces operators and relations by itself, so that only a space that parts
+// two operands is kept.
+func mathText(b *strings.Builder, text string, before, after rune) {
+	operand := func(c rune) bool { return unicode.IsLetter(c) || unicode.IsDigit(c) }
+	for len(text) > 0 {
+		if n := lettersAt(text); n > 0 {
+			b.WriteString(mathWord(text[:n]))
+			before, _ = utf8.DecodeLastRuneInString(text[:n])
+			text = text[n:]
 			continue
 		}
-		c, n := utf8.DecodeRuneInString(s)
+		c, n := utf8.DecodeRuneInString(text)
+		text = text[n:]
+		next := after
+		if text != "" {
+			next, _ = utf8.DecodeRuneInString(text)
+		}
 		switch tex, known := texSymbols[c]; {
 		case known:
 			b.WriteString(tex + " ")
-		case c == ' ':
+		case c == ' ' && operand(before) && operand(next):
 			b.WriteString(`\ `)
 		case c == '\\':
 			b.WriteString(`\backslash `)
@@ -233,9 +268,8 @@ func mathText(r run) string {
 		default:
 			b.WriteString(`\text{` + escapeLaTeX(string(c)) + "}")
 		}
-		s = s[n:]
+		before = c
 	}
-	return strings.ReplaceAll(b.String(), `\ =\ `, "=")
 }
 
 func mathWord(word string) string {
@@ -247,18 +281,28 @@ func mathWord(word string) string {
 			return word
 		}
 	}
+	if strings.IndexFunc(word, func(c rune) bool { return c > 0x7f }) < 0 {
+		return `\mathrm{` + word + "}"
+	}
 	return `\text{` + escapeLaTeX(word) + "}"
 }
 
 // proseLaTeX is a sentence as part of a LaTeX paragraph.
 func proseLaTeX(s string) string {
 	var b strings.Builder
-	for _, r := range proseRuns(s) {
-		text := escapeLaTeX(r.text)
-		for i := len(r.path) - 1; i >= 0; i-- {
-			text = map[byte]string{'^': `\textsuperscript{`, '_': `\textsubscript{`}[r.path[i]] + text + "}"
+	list := proseRuns(s)
+	for len(list) > 0 {
+		n := slices.IndexFunc(list, func(r run) bool { return !r.italic && r.path == "" })
+		if n < 0 {
+			n = len(list)
 		}
-		b.WriteString(text)
+		if n > 0 {
+			b.WriteString("$" + runsTeX(list[:n]) + "$")
+			list = list[n:]
+			continue
+		}
+		b.WriteString(escapeLaTeX(list[0].text))
+		list = list[1:]
 	}
 	return b.String()
 }

@@ -77,7 +77,7 @@ func (x box) baselines() (label, sub float64) {
 	if x.sub == nil {
 		return tenth(x.center.y + labelSize*0.32), 0
 	}
-	return tenth(x.center.y - labelSize*0.14), tenth(x.center.y + subSize*1.12)
+	return tenth(x.center.y - labelSize*0.25), tenth(x.center.y + subSize*1.24)
 }
 
 func (m mark) baseline() float64 { return tenth(m.center.y + markSize*0.33) }
