@@ -27,7 +27,7 @@ type mark struct {
 	width  float64
 	height float64
 	text   []run
-	source string // the text as it was given
+	edge   int // which of the edges
 	color  string
 }
 

@@ -84,7 +84,7 @@ func (pic *drawing) markAt(edges []link, k int, t float64) mark {
 	text := runs(edges[k].label)
 	return mark{
 		center: point{tenth(x), tenth(y)}, width: tenth(runsWidth(text, markSize) + 5), height: markSize + 2.5,
-		text: text, source: edges[k].label, color: line.color,
+		text: text, edge: k, color: line.color,
 	}
 }
 

@@ -39,7 +39,7 @@ func (d Diagram) TikZ() string {
 		fmt.Fprintf(&b, " -- (n%d);\n", e.upper)
 	}
 	for _, m := range pic.marks {
-		fmt.Fprintf(&b, "  \\node[degree] at (%s,%s) {$%s$};\n", number(m.center.x), number(pic.height-m.center.y), notationTeX(m.source))
+		fmt.Fprintf(&b, "  \\node[degree] at (%s,%s) {$%s$};\n", number(m.center.x), number(pic.height-m.center.y), notationTeX(l.edges[m.edge].label))
 	}
 	b.WriteString("\\end{tikzpicture}\n")
 	return b.String()
