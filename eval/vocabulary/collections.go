@@ -170,21 +170,41 @@ func accumulate(op string, empty int) func(c *value.Context, a []value.Value) (v
 			s.Mul(s, r.Len())
 			return value.Integer{N: s.Rsh(s, 1)}, nil
 		}
-		var total value.Value
+		// Neighbours of equal size are joined, so that the operands of one
+		// operation are about equally long and long multiplication pays.
+		type part struct {
+			v value.Value
+			n int
+		}
+		var parts []part
+		join := func() error {
+			k := len(parts) - 2
+			v, err := value.Operate(c, op, parts[k].v, parts[k+1].v)
+			parts[k] = part{v, parts[k].n + parts[k+1].n}
+			parts = parts[:k+1]
+			return err
+		}
 		for v, err := range l.All(c) {
 			c.W.Poll()
-			if err == nil && total != nil {
-				v, err = value.Operate(c, op, total, v)
-			}
 			if err != nil {
 				return nil, err
 			}
-			total = v
+			parts = append(parts, part{v, 1})
+			for k := len(parts) - 1; k > 0 && parts[k].n == parts[k-1].n; k-- {
+				if err := join(); err != nil {
+					return nil, err
+				}
+			}
 		}
-		if total == nil {
+		for len(parts) > 1 {
+			if err := join(); err != nil {
+				return nil, err
+			}
+		}
+		if len(parts) == 0 {
 			return value.Int(empty), nil
 		}
-		return total, nil
+		return parts[0].v, nil
 	}
 }
 
