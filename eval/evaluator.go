@@ -68,11 +68,7 @@ func (c *cell) node(x lang.Expr) (value.Value, error) {
 	case *lang.Logic:
 		return c.logic(x)
 	case *lang.Over:
-		a, b, err := c.pair(x.X, x.K)
-		if err != nil {
-			return nil, err
-		}
-		return value.Over(c.ctx, a, b)
+		return c.over(x)
 	case *lang.If:
 		v, err := c.truth(x.Cond)
 		if err != nil {
