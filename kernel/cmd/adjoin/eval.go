@@ -59,6 +59,9 @@ Exit status: 0, 1 when the evaluation fails, 2 for a wrong command line.`,
 			return out.evaluate(s, args[0])
 		},
 	}
+	c.SetFlagErrorFunc(func(_ *cobra.Command, err error) error {
+		return usageError{fmt.Errorf("%w; a TEXT that begins with - stands behind --, as in adjoin eval -- '-x^2'", err)}
+	})
 	c.Flags().StringVar(&as, "as", "plain", "`form` to print: plain, latex, html, svg, pdf, data, or a MIME type")
 	c.Flags().BoolVar(&asJSON, "json", false, "print all forms of all values as one JSON object")
 	b.flags(c.Flags())

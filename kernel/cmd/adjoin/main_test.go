@@ -53,6 +53,8 @@ func TestEval(t *testing.T) {
 		{"", []string{"eval", "--as", "text/plain", "6*7"}, 0, "42\n", ""},
 		{"", []string{"evaluate"}, 2, "", "--help"},
 		{"", []string{"eval", "--unknown"}, 2, "", "--help"},
+		{"", []string{"eval", "-x^2"}, 2, "", "behind --"},
+		{"", []string{"eval", "--", "-x^2"}, 0, "-x^2\n", ""},
 	} {
 		code, stdout, stderr := program(t, c.stdin, c.args...)
 		if code != c.code || c.code == 0 && stdout != c.stdout || !strings.Contains(stderr, c.stderr) {
